@@ -1,0 +1,386 @@
+import type { ColumnType, Generated, JSONColumnType } from 'kysely';
+import type { CalendarDay } from '@/lib/domain/calendar-day';
+import type { Lead, Labour, PartNeed, Scope, Trigger, Window } from '@/lib/domain/rule';
+
+/** An instant: read as a Date, written as a Date. */
+type Instant = ColumnType<Date, Date, Date>;
+/** As Instant, with a default of the database's clock when none is given. */
+type DefaultInstant = ColumnType<Date, Date | undefined, Date>;
+type MaybeInstant = ColumnType<Date | null, Date | null | undefined, Date | null>;
+/** jsonb: read as its parsed value, written as JSON text. */
+type Json<T extends object> = JSONColumnType<T>;
+type DefaultJson<T extends object> = ColumnType<T, string | undefined, string>;
+
+export interface OperatorTable {
+  id: Generated<string>;
+  only_one: Generated<boolean>;
+  name: string;
+  created_at: DefaultInstant;
+}
+
+export interface DockTable {
+  id: Generated<string>;
+  name: string;
+  time_zone: string;
+  season_from: string | null;
+  season_to: string | null;
+  open_weekdays: Generated<string[]>;
+  craft_numbers: Generated<'us' | 'other'>;
+  created_at: DefaultInstant;
+}
+
+export interface ModelTable {
+  id: Generated<string>;
+  name: string;
+  propulsion: 'jet' | 'outboard' | 'inboard' | 'electric';
+  stroke: 'two' | 'four' | null;
+  engines: number;
+  cylinders: number;
+  carb_count: number;
+  specs: DefaultJson<Record<string, unknown>>;
+  created_at: DefaultInstant;
+}
+
+export interface PersonTable {
+  id: Generated<string>;
+  email: string;
+  name: string;
+  role: 'manager' | 'mechanic' | 'dock';
+  dock_ids: Generated<string[]>;
+  password_hash: string | null;
+  session_version: Generated<number>;
+  digest_wanted: Generated<boolean>;
+  unsubscribe_key: Generated<string>;
+  created_at: DefaultInstant;
+  deactivated_at: MaybeInstant;
+  deactivated_by: string | null;
+}
+
+export interface SessionTable {
+  id: Generated<string>;
+  person_id: string;
+  session_version: number;
+  created_at: DefaultInstant;
+  expires_at: Instant;
+  ended_at: MaybeInstant;
+}
+
+export interface KnownDeviceTable {
+  id: Generated<string>;
+  person_id: string;
+  token_hash: Buffer;
+  created_at: DefaultInstant;
+  expires_at: Instant;
+}
+
+export interface SignInAttemptTable {
+  id: ColumnType<number, never, never>;
+  email_key: string;
+  address: string;
+  device_id: string | null;
+  succeeded: boolean;
+  attempted_at: DefaultInstant;
+}
+
+export interface InvitationTable {
+  id: Generated<string>;
+  email: string;
+  name: string;
+  role: 'manager' | 'mechanic' | 'dock';
+  dock_ids: Generated<string[]>;
+  token_hash: Buffer;
+  invited_by: string;
+  invited_at: DefaultInstant;
+  expires_at: Instant;
+  accepted_at: MaybeInstant;
+  withdrawn_at: MaybeInstant;
+}
+
+export interface PasswordResetTable {
+  id: Generated<string>;
+  person_id: string;
+  token_hash: Buffer;
+  asked_at: DefaultInstant;
+  expires_at: Instant;
+  used_at: MaybeInstant;
+}
+
+export interface ApiKeyTable {
+  id: Generated<string>;
+  person_id: string;
+  name: string;
+  prefix: string;
+  key_hash: Buffer;
+  created_at: DefaultInstant;
+  last_used_at: MaybeInstant;
+  revoked_at: MaybeInstant;
+}
+
+export interface UnitTable {
+  id: Generated<string>;
+  fleet_number: string;
+  model_id: string;
+  dock_id: string;
+  hin: string | null;
+  registration: string | null;
+  entered_service_on: CalendarDay;
+  carb_count_override: number | null;
+  created_at: DefaultInstant;
+  created_by: string | null;
+  retired_at: MaybeInstant;
+  retired_by: string | null;
+}
+
+export interface OutingTable {
+  id: string;
+  unit_id: string;
+  dock_id: string;
+  started_at: MaybeInstant;
+  due_back_at: MaybeInstant;
+  planned_tenths: number | null;
+  renter_reference: string | null;
+  ended_at: MaybeInstant;
+  ended_dock_id: string | null;
+  voided_at: MaybeInstant;
+  voided_by: string | null;
+  void_reason: string | null;
+}
+
+export interface ReadingTable {
+  id: Generated<string>;
+  unit_id: string;
+  taken_at: Instant;
+  shown_tenths: number;
+  base_tenths: number;
+  engine_hours_tenths: ColumnType<number, never, never>;
+  source: 'entry' | 'check_in' | 'swap_final' | 'swap_first' | 'closure' | 'correction';
+  outing_id: string | null;
+  recorded_at: DefaultInstant;
+  recorded_by: string | null;
+  confirm_reason: string | null;
+  review_code: 'unusual_jump' | 'late_arrival' | null;
+  reviewed_at: MaybeInstant;
+  reviewed_by: string | null;
+  review_note: string | null;
+  voided_at: MaybeInstant;
+  voided_by: string | null;
+  void_reason: string | null;
+  replaces_reading_id: string | null;
+}
+
+export interface LiveMeterTable {
+  unit_id: string;
+  revision: Generated<number>;
+  reading_id: string | null;
+  read_at: Instant;
+  base_tenths: number;
+  shown_tenths: number;
+  engine_hours_tenths: number;
+  starting_outings: Generated<number>;
+  outing_count: number;
+}
+
+export interface RuleTable {
+  id: Generated<string>;
+  name: string;
+  kind: 'inspection' | 'service' | 'rebuild';
+  scope: Json<Scope>;
+  triggers: Json<Trigger[]>;
+  lead: Json<Lead>;
+  tolerance: Json<Window>;
+  holds_unit: boolean;
+  labour: Json<Labour>;
+  parts: DefaultJson<PartNeed[]>;
+  procedure_id: string | null;
+  revision: Generated<number>;
+  created_at: DefaultInstant;
+  created_by: string | null;
+  changed_at: DefaultInstant;
+  changed_by: string | null;
+  ended_at: MaybeInstant;
+  ended_by: string | null;
+}
+
+export interface AssessmentTable {
+  unit_id: string;
+  wanted_revision: Generated<number>;
+  assessed_revision: Generated<number>;
+  assessed_at: MaybeInstant;
+}
+
+export interface DuePointTable {
+  unit_id: string;
+  rule_id: string;
+  trigger_index: number;
+  due_tenths: number | null;
+  upcoming_from_tenths: number | null;
+  overdue_from_tenths: number | null;
+  due_outings: number | null;
+  upcoming_from_outings: number | null;
+  overdue_from_outings: number | null;
+  due_on: CalendarDay | null;
+  upcoming_from_on: CalendarDay | null;
+  overdue_from_on: CalendarDay | null;
+}
+
+export interface DefectTable {
+  id: Generated<string>;
+  unit_id: string;
+  title: string;
+  detail: string | null;
+  holds_unit: boolean;
+  reported_at: Instant;
+  reported_by: string | null;
+  reading_id: string | null;
+  cleared_at: MaybeInstant;
+  cleared_by: string | null;
+  clear_note: string | null;
+}
+
+export interface LayUpTable {
+  id: Generated<string>;
+  unit_id: string;
+  from_on: CalendarDay;
+  until_on: CalendarDay | null;
+  reason: string;
+  recorded_at: DefaultInstant;
+  recorded_by: string | null;
+  ended_at: MaybeInstant;
+  ended_by: string | null;
+}
+
+export interface TaskTable {
+  id: Generated<string>;
+  unit_id: string;
+  kind: 'inspection' | 'service' | 'rebuild' | 'repair';
+  title: string;
+  detail: string | null;
+  origin: 'rule' | 'defect' | 'person';
+  rule_id: string | null;
+  defect_id: string | null;
+  planned_on: CalendarDay | null;
+  planned_at: MaybeInstant;
+  planned_by: string | null;
+  expected_minutes: number | null;
+  opened_at: Instant;
+  opened_by: string | null;
+  started_at: MaybeInstant;
+  started_by: string | null;
+  ended_at: MaybeInstant;
+  withdrawn_by: string | null;
+  withdraw_reason: string | null;
+  revision: Generated<number>;
+}
+
+export interface TaskNoteTable {
+  id: Generated<string>;
+  task_id: string;
+  text: string;
+  written_at: Instant;
+  written_by: string | null;
+}
+
+export interface ClosureTable {
+  id: Generated<string>;
+  task_id: string;
+  unit_id: string;
+  rule_id: string | null;
+  closed_at: Instant;
+  closed_on: CalendarDay;
+  engine_hours_tenths: number;
+  outings: number;
+  minutes: number | null;
+  note: string | null;
+  results: DefaultJson<unknown[]>;
+  parts_used: DefaultJson<unknown[]>;
+  held_since_at: MaybeInstant;
+  closed_by: string | null;
+  recorded_at: DefaultInstant;
+  reversed_at: MaybeInstant;
+  reversed_by: string | null;
+  reverse_reason: string | null;
+}
+
+export interface BaselineTable {
+  id: Generated<string>;
+  unit_id: string;
+  rule_id: string;
+  closed_on: CalendarDay;
+  engine_hours_tenths: number;
+  outings: number;
+  note: string;
+  recorded_at: DefaultInstant;
+  recorded_by: string | null;
+  withdrawn_at: MaybeInstant;
+  withdrawn_by: string | null;
+}
+
+export interface DigestTable {
+  id: Generated<string>;
+  person_id: string;
+  week_on: CalendarDay;
+  claimed_at: Instant;
+  sent_at: MaybeInstant;
+  failure: string | null;
+}
+
+export interface MailTable {
+  id: Generated<string>;
+  kind: string;
+  recipient: string;
+  subject: string;
+  text_body: string;
+  html_body: string | null;
+  headers: DefaultJson<Record<string, string>>;
+  queued_at: DefaultInstant;
+  claimed_at: MaybeInstant;
+  sent_at: MaybeInstant;
+  failure: string | null;
+}
+
+export interface WorkerHeartbeatTable {
+  worker_id: string;
+  started_at: Instant;
+  beat_at: Instant;
+  stopped_at: MaybeInstant;
+}
+/** The view of everything that counts as "done": closures not reversed and baselines not withdrawn. */
+export interface ClosingView {
+  id: string;
+  unit_id: string;
+  rule_id: string;
+  closed_on: CalendarDay;
+  closed_at: Date;
+  engine_hours_tenths: number;
+  outings: number;
+}
+
+export interface DB {
+  operator: OperatorTable;
+  dock: DockTable;
+  model: ModelTable;
+  person: PersonTable;
+  session: SessionTable;
+  known_device: KnownDeviceTable;
+  sign_in_attempt: SignInAttemptTable;
+  invitation: InvitationTable;
+  password_reset: PasswordResetTable;
+  api_key: ApiKeyTable;
+  unit: UnitTable;
+  outing: OutingTable;
+  reading: ReadingTable;
+  live_meter: LiveMeterTable;
+  rule: RuleTable;
+  assessment: AssessmentTable;
+  due_point: DuePointTable;
+  defect: DefectTable;
+  lay_up: LayUpTable;
+  task: TaskTable;
+  task_note: TaskNoteTable;
+  closure: ClosureTable;
+  baseline: BaselineTable;
+  digest: DigestTable;
+  mail: MailTable;
+  worker_heartbeat: WorkerHeartbeatTable;
+  closing: ClosingView;
+}
