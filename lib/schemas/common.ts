@@ -1,0 +1,45 @@
+import { z } from 'zod';
+import { isCalendarDay } from '@/lib/domain/calendar-day';
+
+/** Decimal engine hours with at most one place, as a meter shows them. */
+export const hours = z
+  .number('give engine hours as a number')
+  .min(0, 'cannot be below 0 h')
+  .max(99_999.9, 'cannot be above 99,999.9 h')
+  .refine((value) => Math.abs(value * 10 - Math.round(value * 10)) < 1e-6, 'has more than one decimal place');
+
+/** A whole count of outings. */
+export const count = z.int('give a whole number').min(0, 'cannot be below 0').max(1_000_000, 'is too many');
+
+/** A day that exists, as YYYY-MM-DD. */
+export const day = z
+  .string('give a day as YYYY-MM-DD')
+  .refine(isCalendarDay, 'is not a day that exists (YYYY-MM-DD)');
+
+/** An instant with its offset, after RFC 3339; parsed to a Date. */
+export const instant = z.iso.datetime({
+  offset: true,
+  error: 'is not an instant (RFC 3339, with its offset)',
+});
+
+export const id = z.uuid('is not an id (a UUID)');
+
+/** One line of text that says something. */
+export const line = (max: number) =>
+  z.string('give text').trim().min(1, 'is empty').max(max, `is longer than ${max} characters`);
+
+/** Free text, possibly several lines. */
+export const text = (max: number) =>
+  z.string('give text').trim().max(max, `is longer than ${max} characters`);
+
+export const idParams = z.object({ id });
+
+/** How a list is asked for in pages. */
+export const pageQuery = {
+  cursor: z.string().max(500).optional(),
+  limit: z.coerce.number().pipe(z.int().min(1).max(500)).optional(),
+};
+
+/** What a list answers. */
+export const listOf = <T extends z.ZodType>(item: T) =>
+  z.object({ items: z.array(item), nextCursor: z.string().nullable() });
