@@ -1,0 +1,18 @@
+import type { Insertable, Kysely, Selectable } from 'kysely';
+import type { DB, DockTable } from '../tables';
+
+export type DockRow = Selectable<DockTable>;
+
+/** The docks in order of name; `ids` narrows them. */
+export function listDocks(db: Kysely<DB>, ids: 'all' | readonly string[]): Promise<DockRow[]> {
+  const query = db.selectFrom('dock').selectAll().orderBy('name');
+  return (ids === 'all' ? query : query.where('id', 'in', [...ids])).execute();
+}
+
+export function findDock(db: Kysely<DB>, id: string): Promise<DockRow | undefined> {
+  return db.selectFrom('dock').selectAll().where('id', '=', id).executeTakeFirst();
+}
+
+export function insertDock(db: Kysely<DB>, row: Insertable<DockTable>): Promise<DockRow> {
+  return db.insertInto('dock').values(row).returningAll().executeTakeFirstOrThrow();
+}

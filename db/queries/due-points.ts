@@ -1,0 +1,154 @@
+import { sql, type Kysely, type Transaction } from 'kysely';
+import type { DuePoint } from '@/lib/domain/due';
+import type { DB } from '../tables';
+
+/** A due point to be stored: of a unit, under a rule, by the index of the rule's trigger. */
+export type DuePointToStore = { unitId: string; ruleId: string; triggerIndex: number; point: DuePoint };
+
+/**
+ * Makes the stored due points of these units exactly `points`. Rows that are right already are not written.
+ * Answers how many rows were written or taken away.
+ */
+export async function replaceDuePoints(
+  trx: Transaction<DB>,
+  unitIds: readonly string[],
+  points: readonly DuePointToStore[],
+): Promise<number> {
+  const columns = toColumns(points);
+  const { rows } = await sql<{ changed: number }>`
+    with wanted as (
+      select * from unnest(
+        ${columns.unitIds}::uuid[], ${columns.ruleIds}::uuid[], ${columns.indexes}::smallint[],
+        ${columns.dueTenths}::int[], ${columns.upcomingTenths}::int[], ${columns.overdueTenths}::int[],
+        ${columns.dueOutings}::int[], ${columns.upcomingOutings}::int[], ${columns.overdueOutings}::int[],
+        ${columns.dueOn}::date[], ${columns.upcomingOn}::date[], ${columns.overdueOn}::date[]
+      ) as w(unit_id, rule_id, trigger_index,
+        due_tenths, upcoming_from_tenths, overdue_from_tenths,
+        due_outings, upcoming_from_outings, overdue_from_outings,
+        due_on, upcoming_from_on, overdue_from_on)
+    ), gone as (
+      delete from due_point p
+       where p.unit_id = any(${[...unitIds]}::uuid[])
+         and not exists (select 1 from wanted w
+           where w.unit_id = p.unit_id and w.rule_id = p.rule_id and w.trigger_index = p.trigger_index)
+      returning 1
+    ), news as (
+      select w.* from wanted w
+        left join due_point p using (unit_id, rule_id, trigger_index)
+       where p.unit_id is null
+          or (w.due_tenths, w.upcoming_from_tenths, w.overdue_from_tenths,
+              w.due_outings, w.upcoming_from_outings, w.overdue_from_outings,
+              w.due_on, w.upcoming_from_on, w.overdue_from_on)
+             is distinct from
+             (p.due_tenths, p.upcoming_from_tenths, p.overdue_from_tenths,
+              p.due_outings, p.upcoming_from_outings, p.overdue_from_outings,
+              p.due_on, p.upcoming_from_on, p.overdue_from_on)
+    ), put as (
+      insert into due_point select * from news
+      on conflict (unit_id, rule_id, trigger_index) do update set
+        due_tenths = excluded.due_tenths, upcoming_from_tenths = excluded.upcoming_from_tenths,
+        overdue_from_tenths = excluded.overdue_from_tenths,
+        due_outings = excluded.due_outings, upcoming_from_outings = excluded.upcoming_from_outings,
+        overdue_from_outings = excluded.overdue_from_outings,
+        due_on = excluded.due_on, upcoming_from_on = excluded.upcoming_from_on,
+        overdue_from_on = excluded.overdue_from_on
+      returning 1
+    )
+    select ((select count(*) from gone) + (select count(*) from put))::int as changed`.execute(trx);
+  return rows[0]?.changed ?? 0;
+}
+
+/** One array a column, in the order of the points: what `unnest` takes. */
+function toColumns(points: readonly DuePointToStore[]) {
+  const hours = points.map(({ point }) => (point.on === 'engine_hours' ? point : null));
+  const outings = points.map(({ point }) => (point.on === 'outings' ? point : null));
+  const days = points.map(({ point }) => (point.on === 'calendar' ? point : null));
+  return {
+    unitIds: points.map((p) => p.unitId),
+    ruleIds: points.map((p) => p.ruleId),
+    indexes: points.map((p) => p.triggerIndex),
+    dueTenths: hours.map((p) => p?.dueTenths ?? null),
+    upcomingTenths: hours.map((p) => p?.upcomingFromTenths ?? null),
+    overdueTenths: hours.map((p) => p?.overdueFromTenths ?? null),
+    dueOutings: outings.map((p) => p?.dueOutings ?? null),
+    upcomingOutings: outings.map((p) => p?.upcomingFromOutings ?? null),
+    overdueOutings: outings.map((p) => p?.overdueFromOutings ?? null),
+    dueOn: days.map((p) => p?.dueOn ?? null),
+    upcomingOn: days.map((p) => p?.upcomingFromOn ?? null),
+    overdueOn: days.map((p) => p?.overdueFromOn ?? null),
+  };
+}
+
+/** What due points are computed from, unit by unit. */
+export type UnitFacts = Awaited<ReturnType<typeof listUnitFacts>>[number];
+
+/** Scope, entry into service and closings of these units; retired ones are left out. */
+export async function listUnitFacts(db: Kysely<DB>, unitIds: readonly string[]) {
+  return db
+    .selectFrom('unit')
+    .innerJoin('model', 'model.id', 'unit.model_id')
+    .select((eb) => [
+      'unit.id',
+      'unit.model_id as modelId',
+      'unit.dock_id as dockId',
+      'unit.entered_service_on as enteredServiceOn',
+      'model.propulsion',
+      'model.stroke',
+      'model.engines',
+      'model.cylinders',
+      sql<number>`coalesce(unit.carb_count_override, model.carb_count)`.as('carbCount'),
+      eb
+        .selectFrom('closing')
+        .whereRef('closing.unit_id', '=', 'unit.id')
+        .select(
+          sql<StoredClosing[]>`coalesce(json_agg(json_build_array(
+            closing.rule_id, closing.closed_on, closing.engine_hours_tenths, closing.outings)
+            order by closing.closed_at, closing.id), '[]')`.as('list'),
+        )
+        .as('closings'),
+    ])
+    .where('unit.id', '=', sql<string>`any(${[...unitIds]}::uuid[])`)
+    .where('unit.retired_at', 'is', null)
+    .execute();
+}
+
+/** Rule, day, engine hours in tenths, outings. */
+export type StoredClosing = [ruleId: string, closedOn: string, engineHoursTenths: number, outings: number];
+
+/**
+ * Locks the assessments of these units, in order of id, so that no two refreshes of one unit interleave.
+ * Answers the revision each is wanted at.
+ */
+export async function lockAssessments(trx: Transaction<DB>, unitIds: readonly string[]) {
+  return trx
+    .selectFrom('assessment')
+    .select(['unit_id', 'wanted_revision', 'assessed_revision'])
+    .where('unit_id', '=', sql<string>`any(${[...unitIds]}::uuid[])`)
+    .orderBy('unit_id')
+    .forUpdate()
+    .execute();
+}
+
+/** Records that these units' due points are those of the locked revision. Rows that say so already stay. */
+export async function replaceAssessments(
+  trx: Transaction<DB>,
+  unitIds: readonly string[],
+  now: Date,
+): Promise<void> {
+  await trx
+    .updateTable('assessment')
+    .set((eb) => ({ assessed_revision: eb.ref('wanted_revision'), assessed_at: now }))
+    .where('unit_id', '=', sql<string>`any(${[...unitIds]}::uuid[])`)
+    .whereRef('assessed_revision', '<', 'wanted_revision')
+    .execute();
+}
+
+/**
+ * Says that these units must be assessed anew before they may be hired out: for every write that can bring a due
+ * point nearer. Until the worker has done it they are held as not yet assessed.
+ */
+export async function wantAssessments(trx: Kysely<DB>, unitIds: readonly string[]): Promise<void> {
+  await sql`
+    insert into assessment (unit_id) select id from unnest(${[...unitIds]}::uuid[]) as u(id) order by id
+    on conflict (unit_id) do update set wanted_revision = assessment.wanted_revision + 1`.execute(trx);
+}

@@ -1,0 +1,72 @@
+import { sql, type Insertable, type Kysely, type Selectable, type Transaction } from 'kysely';
+import type { DB, LiveMeterTable, UnitTable } from '../tables';
+
+/** A unit with what its model, dock and live meter say of it. */
+export type UnitRow = Awaited<ReturnType<typeof getUnit>>;
+export type LiveMeterRow = Selectable<LiveMeterTable>;
+
+function selectUnits(db: Kysely<DB>) {
+  return db
+    .selectFrom('unit')
+    .innerJoin('model', 'model.id', 'unit.model_id')
+    .innerJoin('dock', 'dock.id', 'unit.dock_id')
+    .innerJoin('live_meter', 'live_meter.unit_id', 'unit.id')
+    .selectAll('unit')
+    .select([
+      'model.name as model_name',
+      'model.propulsion',
+      'model.stroke',
+      'model.engines',
+      'model.cylinders',
+      'dock.name as dock_name',
+      'dock.time_zone',
+      'dock.craft_numbers',
+      'live_meter.engine_hours_tenths',
+      'live_meter.shown_tenths',
+      'live_meter.base_tenths',
+      'live_meter.outing_count',
+      'live_meter.read_at',
+      sql<number>`coalesce(unit.carb_count_override, model.carb_count)`.as('carb_count'),
+    ]);
+}
+
+export function findUnit(db: Kysely<DB>, id: string) {
+  return selectUnits(db).where('unit.id', '=', id).executeTakeFirst();
+}
+
+export function getUnit(db: Kysely<DB>, id: string) {
+  return selectUnits(db).where('unit.id', '=', id).executeTakeFirstOrThrow();
+}
+
+/** The units of these docks by fleet number, retired ones left out. */
+export function listUnits(db: Kysely<DB>, dockIds: 'all' | readonly string[]): Promise<UnitRow[]> {
+  const query = selectUnits(db).where('unit.retired_at', 'is', null).orderBy('unit.fleet_number');
+  return (dockIds === 'all' ? query : query.where('unit.dock_id', 'in', [...dockIds])).execute();
+}
+
+export function insertUnit(db: Kysely<DB>, row: Insertable<UnitTable>) {
+  return db.insertInto('unit').values(row).returning('id').executeTakeFirstOrThrow();
+}
+
+/**
+ * Locks units against every other writer of their facts, in order of id so that two writers cannot wait for each
+ * other, and counts the write on each meter. Answers the live meters.
+ */
+export async function lockUnits(
+  trx: Transaction<DB>,
+  ids: readonly string[],
+): Promise<Map<string, LiveMeterRow>> {
+  const rows = await trx
+    .selectFrom('live_meter')
+    .selectAll()
+    .where('unit_id', 'in', [...ids])
+    .orderBy('unit_id')
+    .forUpdate()
+    .execute();
+  await trx
+    .updateTable('live_meter')
+    .set((eb) => ({ revision: eb('revision', '+', 1) }))
+    .where('unit_id', 'in', [...ids])
+    .execute();
+  return new Map(rows.map((row) => [row.unit_id, row]));
+}

@@ -1,0 +1,4 @@
+import type { Context } from '@/lib/context';
+
+/** What a job's file exports: a few lines that parse the payload and call one action, as the system. */
+export type JobRun = (ctx: Context, payload: unknown) => Promise<void>;

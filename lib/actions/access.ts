@@ -1,0 +1,66 @@
+import { findUnit, type UnitRow } from '@/db/queries/units';
+import { findTask, type TaskRow } from '@/db/queries/tasks';
+import { findDock, type DockRow } from '@/db/queries/docks';
+import type { Context } from '@/lib/context';
+import { canAtDock, canFleetWide, worksAt, type DockAct, type FleetAct } from '@/lib/domain/access';
+import { Refusal, refuseField } from '@/lib/errors';
+
+declare const checked: unique symbol;
+/** A row that the policy was asked about. Only this file makes one; an action that changes a row takes one. */
+export type Checked<Row> = Row & { readonly [checked]: true };
+
+/** Throws `forbidden` unless the actor may do this, which concerns every dock. */
+export function requireFleetWide(ctx: Context, act: FleetAct): void {
+  if (!canFleetWide(ctx.actor, act)) throw forbidden();
+}
+
+/** Throws `forbidden` unless the actor may do this at the dock; `path` names the field that chose the dock. */
+export function requireAtDock(ctx: Context, act: DockAct, dockId: string, path = ''): void {
+  if (canAtDock(ctx.actor, act, dockId)) return;
+  if (path && !worksAt(ctx.actor, dockId))
+    throw refuseField(path, 'is at a dock you do not work at', 'forbidden');
+  throw forbidden();
+}
+
+/** The dock. Throws `not_found` on `path`, or `forbidden`. */
+export async function accessDock(
+  ctx: Context,
+  dockId: string,
+  act: DockAct,
+  path = 'dockId',
+): Promise<Checked<DockRow>> {
+  const row = await findDock(ctx.db, dockId);
+  if (!row) throw refuseField(path, 'is no dock of this fleet', 'not_found');
+  requireAtDock(ctx, act, row.id, path);
+  return row as Checked<DockRow>;
+}
+
+/** The unit. Throws `not_found` on `path`, or `forbidden`. */
+export async function accessUnit(
+  ctx: Context,
+  unitId: string,
+  act: DockAct,
+  path = 'id',
+): Promise<Checked<UnitRow>> {
+  const row = await findUnit(ctx.db, unitId);
+  if (!row) throw refuseField(path, 'is no unit of this fleet', 'not_found');
+  requireAtDock(ctx, act, row.dock_id, path);
+  return row as Checked<UnitRow>;
+}
+
+/** The task, with its unit's dock. Throws `not_found` on `path`, or `forbidden`. */
+export async function accessTask(
+  ctx: Context,
+  taskId: string,
+  act: DockAct,
+  path = 'id',
+): Promise<Checked<TaskRow>> {
+  const row = await findTask(ctx.db, taskId);
+  if (!row) throw refuseField(path, 'is no task of this fleet', 'not_found');
+  requireAtDock(ctx, act, row.dock_id, path);
+  return row as Checked<TaskRow>;
+}
+
+function forbidden(): Refusal {
+  return new Refusal('forbidden', 'Your role does not allow this. Ask a manager.');
+}

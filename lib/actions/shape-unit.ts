@@ -1,0 +1,22 @@
+import type { UnitRow } from '@/db/queries/units';
+import type { Unit } from '@/lib/schemas/unit';
+
+/** A unit as the API and the screens show it: engine hours in decimal hours. */
+export function toUnit(row: UnitRow): Unit {
+  return {
+    id: row.id,
+    fleetNumber: row.fleet_number,
+    modelId: row.model_id,
+    modelName: row.model_name,
+    dockId: row.dock_id,
+    dockName: row.dock_name,
+    hin: row.hin,
+    registration: row.registration,
+    enteredServiceOn: row.entered_service_on,
+    engineHours: row.engine_hours_tenths / 10,
+    outings: row.outing_count,
+    carbCount: row.carb_count,
+    readAt: row.read_at.toISOString(),
+    retiredAt: row.retired_at?.toISOString() ?? null,
+  };
+}
