@@ -1,0 +1,83 @@
+import Link from 'next/link';
+import { StateMark } from '@/components/state/StateMark';
+import type { UnitState } from '@/components/state/state-words';
+import { chooseScale, distanceFromTop, placeUnit, type Scale, type WaterlineUnit } from './geometry';
+
+export type FleetDock = { key: string; name: string; href?: string; units: WaterlineUnit[] };
+
+const states: UnitState[] = ['ready', 'out', 'held'];
+const fills: Record<UnitState, string> = { ready: 'fill-ready', out: 'fill-out', held: 'fill-held' };
+
+/**
+ * Every dock as a strip on one scale for the whole fleet, so docks compare: a bar for each unit, standing
+ * on the water line or hanging below it, lowest first, and the count of each state in words.
+ */
+export function FleetWaterline({ docks, label }: { docks: FleetDock[]; label: string }) {
+  const scale = chooseScale(docks.flatMap((dock) => dock.units));
+  return (
+    <section aria-label={label} className="grid gap-6">
+      {docks.map((dock) => (
+        <div
+          key={dock.key}
+          className="keep-together grid gap-2 lg:grid-cols-[16rem_1fr] lg:items-end lg:gap-6"
+        >
+          <div>
+            <h3 className="text-xl">
+              {dock.href ? (
+                <Link href={dock.href} className="link inline-flex min-h-target items-center">
+                  {dock.name}
+                </Link>
+              ) : (
+                dock.name
+              )}
+            </h3>
+            <p className="flex flex-wrap gap-x-4 gap-y-1">
+              {states.map((state) => (
+                <StateMark
+                  key={state}
+                  plain
+                  state={state}
+                  detail={String(dock.units.filter((unit) => unit.state === state).length)}
+                />
+              ))}
+            </p>
+          </div>
+          <Strip units={dock.units} scale={scale} />
+        </div>
+      ))}
+    </section>
+  );
+}
+
+function Strip({ units, scale }: { units: WaterlineUnit[]; scale: Scale }) {
+  const placed = units
+    .map((unit) => ({ unit, height: placeUnit(unit, scale).height }))
+    .sort((a, b) => a.height - b.height);
+  const slots = Math.max(24, placed.length);
+  const water = distanceFromTop(0, 90);
+  return (
+    <svg
+      viewBox={`0 0 ${slots * 10} 90`}
+      preserveAspectRatio="none"
+      className="h-24 w-full"
+      aria-hidden="true"
+    >
+      <rect y={water} width="100%" height={90 - water} className="fill-shoal" />
+      {placed.map(({ unit, height }, index) => {
+        const y = distanceFromTop(height, 90);
+        const tall = Math.max(3, Math.abs(y - water));
+        return (
+          <rect
+            key={unit.fleetNumber}
+            x={index * 10 + 2}
+            y={height >= 0 ? water - tall : water}
+            width="6"
+            height={tall}
+            className={fills[unit.state]}
+          />
+        );
+      })}
+      <rect y={water - 1} width="100%" height="2" className="fill-line" />
+    </svg>
+  );
+}
