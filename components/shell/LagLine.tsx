@@ -1,0 +1,20 @@
+/** How long a lag is in words: seconds under two minutes, then whole minutes, then whole hours. */
+export function lagText(seconds: number): string {
+  if (seconds < 120) return `${Math.round(seconds)} seconds`;
+  if (seconds < 7_200) return `${Math.floor(seconds / 60)} minutes`;
+  return `${Math.floor(seconds / 3_600)} hours`;
+}
+
+/** Says that the worker is behind. Draws nothing while it keeps up (null). */
+export function LagLine({ seconds }: { seconds: number | null }) {
+  if (seconds === null) return null;
+  return (
+    <p
+      role="status"
+      className="border-y-2 border-warn bg-warn-tint px-gutter py-2 text-center font-semibold text-warn"
+    >
+      Background work is {lagText(seconds)} behind. New due points and tasks may be missing; a unit that is
+      overdue is held all the same.
+    </p>
+  );
+}
