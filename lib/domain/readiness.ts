@@ -1,0 +1,116 @@
+/** Why a unit may not be hired out, what lifts that, and how much is left before it happens. */
+import { addDays, daysBetween } from './calendar-day';
+import type { DuePoint, Standing } from './due';
+import { formatTenths } from './meter';
+import { countOf, describeDay } from './words';
+
+export type HoldReason = 'overdue' | 'defect' | 'laid_up' | 'not_assessed';
+
+/** One reason why a unit may not be hired out now, with what its words need. */
+export type Hold =
+  | { reason: 'overdue'; ruleName: string; point: DuePoint; standing: Standing }
+  | { reason: 'defect'; title: string }
+  | { reason: 'laid_up'; note?: string | null }
+  | { reason: 'not_assessed'; ruleName?: string | null };
+
+function describeOverdue(point: DuePoint, standing: Standing): string {
+  switch (point.on) {
+    case 'engine_hours': {
+      const late = point.overdueFromTenths - point.dueTenths;
+      const allowed = late > 0 ? `, at the latest before ${formatTenths(point.overdueFromTenths)} h` : '';
+      const at = formatTenths(standing.engineHoursTenths);
+      return `was due at ${formatTenths(point.dueTenths)} h${allowed}; the unit has run ${at} h`;
+    }
+    case 'outings': {
+      const late = point.overdueFromOutings - point.dueOutings;
+      const allowed = late > 0 ? `, at the latest before outing ${point.overdueFromOutings}` : '';
+      const made = countOf(standing.outings, 'outing');
+      return `was due at outing ${point.dueOutings}${allowed}; the unit has made ${made}`;
+    }
+    case 'calendar': {
+      const last = addDays(point.overdueFromOn, -1);
+      const allowed = last > point.dueOn ? `, at the latest on ${describeDay(last)}` : '';
+      return `was due on ${describeDay(point.dueOn)}${allowed}`;
+    }
+  }
+}
+
+/** One sentence that says why the unit is held. */
+export function describeHold(hold: Hold): string {
+  switch (hold.reason) {
+    case 'overdue':
+      return `${hold.ruleName} ${describeOverdue(hold.point, hold.standing)}.`;
+    case 'defect':
+      return `Defect reported: ${hold.title}.`;
+    case 'laid_up':
+      return hold.note ? `Laid up: ${hold.note}.` : 'Laid up.';
+    case 'not_assessed':
+      return hold.ruleName
+        ? `Not yet assessed: the due points of ${hold.ruleName} have not been computed.`
+        : 'Not yet assessed: its due points have not been computed.';
+  }
+}
+
+/** One sentence that says what lifts a hold. */
+export function describeLift(hold: Pick<Hold, 'reason'> & { ruleName?: string | null }): string {
+  switch (hold.reason) {
+    case 'overdue':
+      return `Lifted when a mechanic closes the task${hold.ruleName ? ` for ${hold.ruleName}` : ''}.`;
+    case 'defect':
+      return 'Lifted when the defect is closed, or a mechanic or manager says it need not hold the unit.';
+    case 'laid_up':
+      return 'Lifted when a manager brings the unit back into service.';
+    case 'not_assessed':
+      return 'Lifted by the worker within seconds; if it stays, tell a manager that the worker may be down.';
+  }
+}
+
+/** A due point of a rule that holds its unit. */
+export type HoldingPoint = { ruleId: string; point: DuePoint };
+/** What a unit runs in a day, for setting hours and outings against days. */
+export type Pace = { tenthsPerDay: number; outingsPerDay: number };
+/** Taken where nothing is known of a unit's use: 3.0 h and 3 outings a day. */
+export const USUAL_PACE: Pace = { tenthsPerDay: 30, outingsPerDay: 3 };
+
+/**
+ * What is left before the next hold by each measure, null where nothing counts by it; 0 or less when the unit
+ * is held by it now. `ruleId` is the rule that holds first, hours and outings turned into days at a pace.
+ */
+export type Room = {
+  tenthsToHold: number | null;
+  outingsToHold: number | null;
+  daysToHold: number | null;
+  ruleId: string | null;
+};
+
+function measureRoom(point: DuePoint, standing: Standing): { key: keyof Omit<Room, 'ruleId'>; left: number } {
+  switch (point.on) {
+    case 'engine_hours':
+      return { key: 'tenthsToHold', left: point.overdueFromTenths - standing.engineHoursTenths };
+    case 'outings':
+      return { key: 'outingsToHold', left: point.overdueFromOutings - standing.outings };
+    case 'calendar':
+      return { key: 'daysToHold', left: daysBetween(standing.today, point.overdueFromOn) };
+  }
+}
+
+/** How far a unit is from its next hold, over the due points of the rules that hold it. */
+export function computeRoom(
+  points: readonly HoldingPoint[],
+  standing: Standing,
+  pace: Pace = USUAL_PACE,
+): Room {
+  const perDay = { tenthsToHold: pace.tenthsPerDay, outingsToHold: pace.outingsPerDay, daysToHold: 1 };
+  const room: Room = { tenthsToHold: null, outingsToHold: null, daysToHold: null, ruleId: null };
+  let nearest = Infinity;
+  for (const { ruleId, point } of points) {
+    const { key, left } = measureRoom(point, standing);
+    room[key] = Math.min(room[key] ?? Infinity, left);
+    const days = left / Math.max(perDay[key], 0.01);
+    if (days < nearest) {
+      nearest = days;
+      room.ruleId = ruleId;
+    }
+  }
+  return room;
+}
