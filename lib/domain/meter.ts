@@ -1,7 +1,7 @@
 /**
  * Engine-hour meters. Every amount is in whole tenths of an hour, as such meters count.
  *
- * A unit's engine hours are what its meter shows plus what earlier meters ran (`carriedTenths`).
+ * A unit's engine hours are what its meter shows plus what earlier meters ran (`baseTenths`).
  */
 
 /** What a meter showed at an instant. */
@@ -90,20 +90,20 @@ export function checkReading(reading: MeterReading, context: ReadingContext): Re
 }
 
 /** Engine hours of a unit: what its meter shows and what earlier meters ran. */
-export function computeEngineHours(shownTenths: number, carriedTenths: number): number {
-  return shownTenths + carriedTenths;
+export function computeEngineHours(shownTenths: number, baseTenths: number): number {
+  return shownTenths + baseTenths;
 }
 
 /** A new meter: what the old one showed at the end, what the new one showed at first. */
 export type MeterSwap = { oldFinalTenths: number; newFirstTenths: number };
 
 /**
- * What earlier meters have run once a meter is swapped, so that engine hours go on unbroken: at the swap,
+ * The base once a meter is swapped, so that engine hours go on unbroken: at the swap,
  * the new first reading and the new carried hours make the same engine hours as the old final reading and
- * the old carried hours. Negative when a used meter is fitted that shows more than the unit has run.
+ * the old base. Negative when a used meter is fitted that shows more than the unit has run.
  */
-export function computeCarriedHours(carriedTenths: number, swap: MeterSwap): number {
-  return carriedTenths + swap.oldFinalTenths - swap.newFirstTenths;
+export function computeBaseTenths(baseTenths: number, swap: MeterSwap): number {
+  return baseTenths + swap.oldFinalTenths - swap.newFirstTenths;
 }
 
 /**
