@@ -23,6 +23,11 @@ export type Actor = PersonActor | SystemActor;
 /** The worker and the loader of the demo act as the system. */
 export const SYSTEM: SystemActor = { kind: 'system' };
 
+/** Who is written down as having done it; null for the system. */
+export function personIdOf(actor: Actor): string | null {
+  return actor.kind === 'person' ? actor.personId : null;
+}
+
 const EVERYONE: readonly Role[] = ['manager', 'mechanic', 'dock'];
 const WORKSHOP: readonly Role[] = ['manager', 'mechanic'];
 const MANAGER: readonly Role[] = ['manager'];
@@ -38,6 +43,7 @@ const AT_DOCK = {
   'defect.write': EVERYONE,
   'defect.clear': WORKSHOP,
   'baseline.write': WORKSHOP,
+  'baseline.withdraw': MANAGER,
   'task.read': EVERYONE,
   'task.write': WORKSHOP,
   'closure.write': WORKSHOP,
