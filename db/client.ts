@@ -36,13 +36,15 @@ export interface DatabaseOptions {
   applicationName?: string;
   /** Milliseconds a statement may take; 0 for no limit. */
   statementTimeoutMs?: number;
+  /** Milliseconds a transaction may stand idle. */
+  idleInTransactionTimeoutMs?: number;
 }
 
 /**
- * A pool of connections behind Kysely. Every wait has a limit: 5 s to connect, 15 s for a statement, 5 s for a
- * lock, 30 s idle inside a transaction. A lost connection fails its own query, not the process. `destroy()` it.
+ * A pool of connections. Every wait has a limit: 5 s to connect, 15 s for a statement, 5 s for a lock, 30 s idle
+ * inside a transaction. A lost connection fails its own query, not the process. `end()` it.
  */
-export function createDatabase(options: DatabaseOptions): Kysely<DB> {
+export function createPool(options: DatabaseOptions, config: pg.PoolConfig = {}): pg.Pool {
   const pool = new pg.Pool({
     connectionString: options.url,
     max: options.max ?? 10,
@@ -50,15 +52,20 @@ export function createDatabase(options: DatabaseOptions): Kysely<DB> {
     connectionTimeoutMillis: 5_000,
     statement_timeout: options.statementTimeoutMs ?? 15_000,
     lock_timeout: 5_000,
-    idle_in_transaction_session_timeout: 30_000,
+    idle_in_transaction_session_timeout: options.idleInTransactionTimeoutMs ?? 30_000,
     options: '-c timezone=UTC',
-    types,
+    ...config,
   });
   const report = (error: Error) => console.warn(`database connection lost: ${error.message}`);
   pool.on('error', report);
   // A client that is checked out reports to nobody else, and an 'error' nobody hears ends the process.
   pool.on('connect', (client) => client.on('error', report));
-  return new Kysely<DB>({ dialect: new PostgresDialect({ pool }) });
+  return pool;
+}
+
+/** A pool as of createPool behind Kysely, with our readings of days and whole numbers. `destroy()` it. */
+export function createDatabase(options: DatabaseOptions): Kysely<DB> {
+  return new Kysely<DB>({ dialect: new PostgresDialect({ pool: createPool(options, { types }) }) });
 }
 
 const holder = globalThis as typeof globalThis & { wakewrightDatabase?: Kysely<DB> };

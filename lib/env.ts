@@ -47,11 +47,11 @@ const secret = z
     'looks like a default secret; try: openssl rand -base64 33',
   );
 
-const count = (max: number) =>
+const count = (max: number, min = 1) =>
   z.coerce
     .number({ error: 'must be a number' })
     .int('must be a whole number')
-    .min(1, 'must be at least 1')
+    .min(min, `must be at least ${min}`)
     .max(max, `must be at most ${max}`);
 
 const mailbox = z
@@ -73,6 +73,7 @@ const schema = z.object({
   SETUP_TOKEN: z.string().min(16, 'must be at least 16 characters long').optional(),
   DB_POOL_MAX: count(200).default(10),
   WORKER_CONCURRENCY: count(50).default(4),
+  WORKER_BEAT_MS: count(5_000, 200).default(5_000),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info'),
 });
 
@@ -130,6 +131,12 @@ export const VARIABLES: readonly Variable[] = [
   },
   { name: 'DB_POOL_MAX', meaning: 'database connections a process may hold', default: '`10`' },
   { name: 'WORKER_CONCURRENCY', meaning: 'jobs the worker runs at a time', default: '`4`' },
+  {
+    name: 'WORKER_BEAT_MS',
+    meaning:
+      'how often the worker shows that it lives, in milliseconds; after three beats missed others take its jobs',
+    default: '`5000`',
+  },
   { name: 'LOG_LEVEL', meaning: '`debug`, `info`, `warn` or `error`', default: '`info`' },
   { name: 'MAILBOX_PORT', meaning: 'port of the local mailbox’s page', default: '`8025`, or a free one' },
 ];

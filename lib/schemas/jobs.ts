@@ -3,7 +3,6 @@ import { z } from 'zod';
 /** Every kind of job and its payload. The worker's task of the same name parses it and calls one action. */
 export const jobs = {
   'refresh-due': z.object({ unitIds: z.array(z.uuid()).min(1) }),
-  'refresh-rule': z.object({ ruleId: z.uuid() }),
   'open-tasks': z.object({}),
   'send-mail': z.object({ mailId: z.uuid() }),
   'tick-digests': z.object({}),

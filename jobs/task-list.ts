@@ -1,0 +1,10 @@
+import type { JobName } from '@/lib/schemas/jobs';
+import type { JobRun } from './run';
+import { run as openTasks } from './tasks/open-tasks';
+import { run as refreshDue } from './tasks/refresh-due';
+
+/** What runs each kind of job. */
+export const TASKS: Partial<Record<JobName, JobRun>> = {
+  'refresh-due': refreshDue,
+  'open-tasks': openTasks,
+};
