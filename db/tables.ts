@@ -199,6 +199,7 @@ export interface RuleTable {
   changed_by: string | null;
   ended_at: MaybeInstant;
   ended_by: string | null;
+  end_reason: string | null;
 }
 
 export interface AssessmentTable {

@@ -1,13 +1,92 @@
-import type { Kysely, Selectable } from 'kysely';
+import {
+  sql,
+  type Insertable,
+  type Kysely,
+  type Selectable,
+  type Transaction,
+  type Updateable,
+} from 'kysely';
 import type { DB, RuleTable } from '../tables';
 
 export type RuleRow = Selectable<RuleTable>;
+/** A rule with the names of who changed and who ended it. */
+export type NamedRuleRow = RuleRow & { changed_by_name: string | null; ended_by_name: string | null };
 
 /** The rules in force, by name. */
 export function listRules(db: Kysely<DB>): Promise<RuleRow[]> {
   return db.selectFrom('rule').selectAll().where('ended_at', 'is', null).orderBy('name').execute();
 }
 
-export function findRule(db: Kysely<DB>, id: string): Promise<RuleRow | undefined> {
-  return db.selectFrom('rule').selectAll().where('id', '=', id).executeTakeFirst();
+function selectNamedRules(db: Kysely<DB>) {
+  return db
+    .selectFrom('rule')
+    .leftJoin('person as changer', 'changer.id', 'rule.changed_by')
+    .leftJoin('person as ender', 'ender.id', 'rule.ended_by')
+    .selectAll('rule')
+    .select(['changer.name as changed_by_name', 'ender.name as ended_by_name']);
+}
+
+/** The rules by name, those in force first; ended ones only when asked for. */
+export function listNamedRules(db: Kysely<DB>, { ended }: { ended: boolean }): Promise<NamedRuleRow[]> {
+  const query = selectNamedRules(db)
+    .orderBy(sql`rule.ended_at is not null`)
+    .orderBy('rule.name');
+  return (ended ? query : query.where('rule.ended_at', 'is', null)).execute();
+}
+
+export function findRule(db: Kysely<DB>, id: string): Promise<NamedRuleRow | undefined> {
+  return selectNamedRules(db).where('rule.id', '=', id).executeTakeFirst();
+}
+
+/** Locks the rule against every other writer of it until the transaction ends. */
+export async function lockRule(trx: Transaction<DB>, id: string): Promise<void> {
+  await trx.selectFrom('rule').select('id').where('id', '=', id).forUpdate().execute();
+}
+
+export function insertRule(db: Kysely<DB>, row: Insertable<RuleTable>): Promise<{ id: string }> {
+  return db.insertInto('rule').values(row).returning('id').executeTakeFirstOrThrow();
+}
+
+/** Writes these columns of the rule and counts the write. */
+export async function replaceRule(db: Kysely<DB>, id: string, row: Updateable<RuleTable>): Promise<void> {
+  await db
+    .updateTable('rule')
+    .set((eb) => ({ ...row, revision: eb('revision', '+', 1) }))
+    .where('id', '=', id)
+    .execute();
+}
+
+/** How many units are overdue, due and upcoming under a rule. */
+export type RuleStatesRow = { rule_id: string; overdue: number; due: number; upcoming: number };
+
+/** The worst state of each unit under each rule, counted by rule; only units of these docks. */
+export async function listRuleStates(
+  db: Kysely<DB>,
+  dockIds: 'all' | readonly string[],
+  now: Date,
+): Promise<RuleStatesRow[]> {
+  const atDocks = dockIds === 'all' ? sql`true` : sql`u.dock_id = any(${[...dockIds]}::uuid[])`;
+  const { rows } = await sql<RuleStatesRow>`
+    select rule_id,
+           count(*) filter (where worst = 3)::int as overdue,
+           count(*) filter (where worst = 2)::int as due,
+           count(*) filter (where worst = 1)::int as upcoming
+      from (
+        select p.rule_id, p.unit_id, max(case
+            when m.engine_hours_tenths >= p.overdue_from_tenths or m.outing_count >= p.overdue_from_outings
+              or (${now}::timestamptz at time zone d.time_zone)::date >= p.overdue_from_on then 3
+            when m.engine_hours_tenths >= p.due_tenths or m.outing_count >= p.due_outings
+              or (${now}::timestamptz at time zone d.time_zone)::date >= p.due_on then 2
+            when m.engine_hours_tenths >= p.upcoming_from_tenths or m.outing_count >= p.upcoming_from_outings
+              or (${now}::timestamptz at time zone d.time_zone)::date >= p.upcoming_from_on then 1
+            else 0 end) as worst
+          from due_point p
+          join unit u on u.id = p.unit_id and u.retired_at is null
+          join dock d on d.id = u.dock_id
+          join live_meter m on m.unit_id = u.id
+         where ${atDocks}
+         group by p.rule_id, p.unit_id
+      ) by_unit
+     group by rule_id`.execute(db);
+  return rows;
 }

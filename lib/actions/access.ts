@@ -1,6 +1,7 @@
 import { findUnit, type UnitRow } from '@/db/queries/units';
 import { findTask, type TaskRow } from '@/db/queries/tasks';
 import { findDock, type DockRow } from '@/db/queries/docks';
+import { findRule, type NamedRuleRow } from '@/db/queries/rules';
 import type { Context } from '@/lib/context';
 import { canAtDock, canFleetWide, worksAt, type DockAct, type FleetAct } from '@/lib/domain/access';
 import { Refusal, refuseField } from '@/lib/errors';
@@ -46,6 +47,19 @@ export async function accessUnit(
   if (!row) throw refuseField(path, 'is no unit of this fleet', 'not_found');
   requireAtDock(ctx, act, row.dock_id, path);
   return row as Checked<UnitRow>;
+}
+
+/** The rule, ended or in force. Throws `forbidden`, or `not_found` on `path`. */
+export async function accessRule(
+  ctx: Context,
+  ruleId: string,
+  act: FleetAct,
+  path = 'id',
+): Promise<Checked<NamedRuleRow>> {
+  requireFleetWide(ctx, act);
+  const row = await findRule(ctx.db, ruleId);
+  if (!row) throw refuseField(path, 'is no rule of this fleet', 'not_found');
+  return row as Checked<NamedRuleRow>;
 }
 
 /** The task, with its unit's dock. Throws `not_found` on `path`, or `forbidden`. */

@@ -17,3 +17,8 @@ export async function refusingTaken<T>(
     throw refuseField(taken[0], taken[1], 'conflict');
   }
 }
+
+/** Two rules in force never share a name. */
+export const RULE_NAME: Record<string, [path: string, message: string]> = {
+  rule_name: ['name', 'A rule has that name already.'],
+};

@@ -1,0 +1,37 @@
+import { listDocks } from '@/db/queries/docks';
+import { listModels } from '@/db/queries/models';
+import type { Context } from '@/lib/context';
+import { Refusal, type FieldError } from '@/lib/errors';
+import type { CreateRule } from '@/lib/schemas/rule';
+
+/** Throws `invalid_input` for every id in the rule that names nothing, each at its own path. */
+export async function checkRule({ db }: Context, input: CreateRule): Promise<void> {
+  const { modelIds = [], dockIds = [] } = input.appliesTo;
+  const models = modelIds.length > 0 ? await listModels(db) : [];
+  const docks = dockIds.length > 0 ? await listDocks(db, dockIds) : [];
+  const errors: FieldError[] = [
+    ...findUnknown(modelIds, models, 'appliesTo.modelIds', 'is no model of this fleet'),
+    ...findUnknown(dockIds, docks, 'appliesTo.dockIds', 'is no dock of this fleet'),
+    ...input.parts.map((_, index) => ({
+      path: `parts.${index}.partId`,
+      message: 'is no part of this stock',
+    })),
+    ...(input.procedureId ? [{ path: 'procedureId', message: 'is no procedure of this fleet' }] : []),
+  ];
+  if (errors.length === 0) return;
+  throw new Refusal(
+    'invalid_input',
+    errors.map(({ path, message }) => `${path}: ${message}`).join('; '),
+    errors,
+  );
+}
+
+function findUnknown(
+  ids: readonly string[],
+  known: readonly { id: string }[],
+  path: string,
+  message: string,
+): FieldError[] {
+  const there = new Set(known.map(({ id }) => id));
+  return ids.flatMap((id, index) => (there.has(id) ? [] : [{ path: `${path}.${index}`, message }]));
+}
