@@ -1,6 +1,6 @@
-import { sql, type Kysely, type Transaction } from 'kysely';
+import { sql, type Kysely, type Selectable, type Transaction } from 'kysely';
 import type { DuePoint } from '@/lib/domain/due';
-import type { DB } from '../tables';
+import type { DB, DuePointTable } from '../tables';
 
 /** A due point to be stored: of a unit, under a rule, by the index of the rule's trigger. */
 export type DuePointToStore = { unitId: string; ruleId: string; triggerIndex: number; point: DuePoint };
@@ -151,4 +151,63 @@ export async function wantAssessments(trx: Kysely<DB>, unitIds: readonly string[
   await sql`
     insert into assessment (unit_id) select id from unnest(${[...unitIds]}::uuid[]) as u(id) order by id
     on conflict (unit_id) do update set wanted_revision = assessment.wanted_revision + 1`.execute(trx);
+}
+
+/** A stored due point as the domain has it. */
+export type StoredDuePoint = { ruleId: string; triggerIndex: number; point: DuePoint };
+
+/** The stored due points of a unit, under rules in force and ended ones alike. */
+export async function listDuePoints(db: Kysely<DB>, unitId: string): Promise<StoredDuePoint[]> {
+  const rows = await db.selectFrom('due_point').selectAll().where('unit_id', '=', unitId).execute();
+  return rows.map((row) => ({
+    ruleId: row.rule_id,
+    triggerIndex: row.trigger_index,
+    point: toDuePoint(row),
+  }));
+}
+
+function toDuePoint(row: Selectable<DuePointTable>): DuePoint {
+  if (row.due_tenths !== null)
+    return {
+      on: 'engine_hours',
+      dueTenths: row.due_tenths,
+      upcomingFromTenths: row.upcoming_from_tenths!,
+      overdueFromTenths: row.overdue_from_tenths!,
+    };
+  if (row.due_outings !== null)
+    return {
+      on: 'outings',
+      dueOutings: row.due_outings,
+      upcomingFromOutings: row.upcoming_from_outings!,
+      overdueFromOutings: row.overdue_from_outings!,
+    };
+  return {
+    on: 'calendar',
+    dueOn: row.due_on!,
+    upcomingFromOn: row.upcoming_from_on!,
+    overdueFromOn: row.overdue_from_on!,
+  };
+}
+
+/** Whether a unit's due points are those of its facts as they are now. */
+export async function isAssessed(db: Kysely<DB>, unitId: string): Promise<boolean> {
+  const row = await db
+    .selectFrom('assessment')
+    .select(['wanted_revision', 'assessed_revision'])
+    .where('unit_id', '=', unitId)
+    .executeTakeFirst();
+  return row !== undefined && row.assessed_revision >= row.wanted_revision;
+}
+
+/** The latest closing of each rule on a unit. */
+export function listLastClosings(db: Kysely<DB>, unitId: string) {
+  return db
+    .selectFrom('closing')
+    .distinctOn('rule_id')
+    .select(['rule_id', 'closed_on', 'engine_hours_tenths', 'outings'])
+    .where('unit_id', '=', unitId)
+    .orderBy('rule_id')
+    .orderBy('closed_at', 'desc')
+    .orderBy('id', 'desc')
+    .execute();
 }

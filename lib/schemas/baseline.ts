@@ -1,0 +1,31 @@
+import { z } from 'zod';
+import { count, day, hours, id, line } from './common';
+
+/** "Last done at …": for a unit that comes with a past. `note` says who says so. */
+export const recordBaseline = z.strictObject({
+  ruleId: id.toLowerCase(),
+  closedOn: day,
+  engineHours: hours,
+  outings: count.optional(),
+  note: line(500),
+});
+
+export const baselineParams = z.object({ id, baselineId: id });
+
+export const baseline = z.object({
+  id,
+  unitId: id,
+  ruleId: id,
+  ruleName: z.string(),
+  closedOn: z.string(),
+  engineHours: z.number(),
+  outings: z.int(),
+  note: z.string(),
+  recordedAt: z.string(),
+  recordedBy: z.string().nullable(),
+  withdrawnAt: z.string().nullable(),
+  withdrawnBy: z.string().nullable(),
+});
+
+export type RecordBaseline = z.output<typeof recordBaseline>;
+export type Baseline = z.output<typeof baseline>;
