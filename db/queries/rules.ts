@@ -43,6 +43,18 @@ export async function lockRule(trx: Transaction<DB>, id: string): Promise<void> 
   await trx.selectFrom('rule').select('id').where('id', '=', id).forUpdate().execute();
 }
 
+/** What of a rule its due points follow from, as JSON text. */
+type Duties = { scope: string; triggers: string; lead: string; tolerance: string };
+
+/** Whether the rule stands for the same duties already, so that a write moves no due point. */
+export async function hasDuties(db: Kysely<DB>, id: string, duties: Duties): Promise<boolean> {
+  const { rows } = await sql`
+    select 1 from rule
+     where id = ${id} and scope = ${duties.scope}::jsonb and triggers = ${duties.triggers}::jsonb
+       and lead = ${duties.lead}::jsonb and tolerance = ${duties.tolerance}::jsonb`.execute(db);
+  return rows.length > 0;
+}
+
 export function insertRule(db: Kysely<DB>, row: Insertable<RuleTable>): Promise<{ id: string }> {
   return db.insertInto('rule').values(row).returning('id').executeTakeFirstOrThrow();
 }

@@ -1,12 +1,10 @@
-import { isDeepStrictEqual } from 'node:util';
-import { findRule, lockRule, replaceRule, type NamedRuleRow } from '@/db/queries/rules';
+import { findRule, hasDuties, lockRule, replaceRule, type NamedRuleRow } from '@/db/queries/rules';
 import { lockScopes } from '@/db/queries/scopes';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import { personIdOf } from '@/lib/domain/access';
 import { refuseField } from '@/lib/errors';
 import type { ChangeRule, Rule } from '@/lib/schemas/rule';
-import { toSchedule } from '@/lib/schemas/schedule-shape';
 import { accessRule, requireFleetWide } from './access';
 import { assessAgain } from './assess-again';
 import { checkRule } from './check-rule';
@@ -28,11 +26,12 @@ export async function changeRule(ctx: Context, id: string, input: ChangeRule): P
     const before = await accessRule(inside, id, 'rule.write');
     checkCurrent(before, input.revision);
     await checkRule(inside, input);
+    const row = fromRule(input);
+    const moves = !(await hasDuties(trx, id, row));
     await refusingTaken(RULE_NAME, () =>
-      replaceRule(trx, id, { ...fromRule(input), changed_at: ctx.now, changed_by: personIdOf(ctx.actor) }),
+      replaceRule(trx, id, { ...row, changed_at: ctx.now, changed_by: personIdOf(ctx.actor) }),
     );
-    if (movesDuePoints(before, input))
-      await assessAgain(trx, await listCoveredUnits(trx, [before.scope, input.appliesTo]));
+    if (moves) await assessAgain(trx, await listCoveredUnits(trx, [before.scope, input.appliesTo]));
     const covered = await listCoveredUnits(trx, [input.appliesTo]);
     return toRule((await findRule(trx, id))!, covered.length);
   });
@@ -48,9 +47,4 @@ function checkCurrent(row: NamedRuleRow, revision: number | undefined): void {
     `was changed by ${who} at ${when} while you edited. Load it again, then make your change.`,
     'conflict',
   );
-}
-
-function movesDuePoints(before: NamedRuleRow, input: ChangeRule): boolean {
-  const schedule = { triggers: before.triggers, lead: before.lead, window: before.tolerance };
-  return !isDeepStrictEqual([schedule, before.scope], [toSchedule(input), input.appliesTo]);
 }
