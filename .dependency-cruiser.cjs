@@ -3,7 +3,7 @@
  * allowed; anything else is a violation. Packages are named; Node's own modules are `node`.
  */
 const core =
-  '^(node:)?(assert|buffer|child_process|crypto|fs|http|https|net|os|path|process|readline|stream|timers|url|util|worker_threads)(/|$)';
+  '^(node:)?(assert|buffer|child_process|crypto|events|fs|http|https|net|os|path|process|readline|stream|timers|url|util|worker_threads)(/|$)';
 const npm = (...names) => `^node_modules/(@types/)?(${names.join('|')})(/|$)`;
 const anyPackageBut = (...names) => `^node_modules/(?!(@types/)?(${names.join('|')})(/|$))`;
 
@@ -121,7 +121,7 @@ const HOUSE = [
     from: '^jobs/',
     to: [
       '^jobs/',
-      '^lib/(actions|schemas)/',
+      '^lib/(actions|schemas|mail)/',
       '^lib/(context|env|errors)\\.ts$',
       '^db/client\\.ts$',
       npm('graphile-worker', 'kysely', 'zod'),

@@ -1,7 +1,7 @@
 import { beatWorker } from '@/lib/actions/beat-worker';
 import { endWorker } from '@/lib/actions/end-worker';
 import type { Context } from '@/lib/context';
-import type { WorkerLimits } from '@/lib/domain/worker-limits';
+import type { WorkerLimits } from './limits';
 
 type Options = {
   ctx: () => Context;

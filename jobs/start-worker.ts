@@ -2,7 +2,7 @@ import { EventEmitter } from 'node:events';
 import { run, type Runner, type WorkerEvents } from 'graphile-worker';
 import { createDatabase, createPool } from '@/db/client';
 import type { Context } from '@/lib/context';
-import { workerLimits } from '@/lib/domain/worker-limits';
+import { workerLimits } from './limits';
 import type { Env } from '@/lib/env';
 import { CRON_ITEMS } from './crontab';
 import { keepHeartbeat } from './heartbeat';
