@@ -40,8 +40,8 @@ export function StaffShell({
       >
         Skip to content
       </a>
-      <header className="no-print bg-paper">
-        <div className="mx-auto flex max-w-page items-center gap-x-4 gap-y-1 px-gutter pt-2">
+      <header className="no-print bg-buff">
+        <div className="mx-auto flex max-w-page items-center gap-x-4 gap-y-1 px-gutter py-2">
           <Link href={homeHref} className="flex min-h-target items-center rounded">
             <ProductMark />
           </Link>
@@ -50,7 +50,7 @@ export function StaffShell({
             <PersonMenu person={person} theme={theme} signOut={signOut} />
           </div>
         </div>
-        <nav aria-label="Main" className="water-edge mt-2 hidden md:block">
+        <nav aria-label="Main" className="hidden md:block">
           <ul className="mx-auto flex max-w-page flex-wrap gap-x-1 px-gutter">
             {nav.map((item) => (
               <li key={item.href}>
@@ -61,9 +61,9 @@ export function StaffShell({
             ))}
           </ul>
         </nav>
-        <div className="plumb-ticks" aria-hidden="true" />
-        <LagLine seconds={lag} />
+        <div className="water-edge" />
       </header>
+      <LagLine seconds={lag} />
       <main
         id="content"
         tabIndex={-1}
@@ -73,7 +73,7 @@ export function StaffShell({
       </main>
       <nav
         aria-label="Main"
-        className="no-print fixed inset-x-0 bottom-0 z-30 border-t-3 border-line bg-paper pb-[env(safe-area-inset-bottom)] md:hidden"
+        className="no-print fixed inset-x-0 bottom-0 z-30 border-t-3 border-line bg-buff pb-[env(safe-area-inset-bottom)] md:hidden"
       >
         <ul className="grid auto-cols-fr grid-flow-col">
           {bar.map((item) => (
@@ -81,7 +81,7 @@ export function StaffShell({
               <Link
                 href={item.href}
                 aria-current={item.current ? 'page' : undefined}
-                className="flex min-h-dock items-center justify-center border-t-4 border-transparent px-1 text-center text-sm leading-tight font-semibold -outline-offset-4 aria-[current=page]:border-line aria-[current=page]:bg-shoal aria-[current=page]:font-extrabold"
+                className="flex min-h-dock items-center justify-center border-t-4 border-transparent px-1 text-center text-sm leading-tight font-semibold -outline-offset-4 aria-[current=page]:border-line aria-[current=page]:bg-paper aria-[current=page]:font-extrabold"
               >
                 {item.label}
               </Link>

@@ -8,7 +8,7 @@ export function Checkbox({ label, hint, error, id, name, ...rest }: CheckboxProp
   const ownId = useId();
   const fieldId = id ?? name ?? ownId;
   return (
-    <div className="grid gap-1">
+    <div className="grid content-start gap-1">
       <label className="flex min-h-target cursor-pointer items-center gap-3">
         <input
           {...rest}
@@ -20,7 +20,7 @@ export function Checkbox({ label, hint, error, id, name, ...rest }: CheckboxProp
         <span>{label}</span>
       </label>
       {hint ? (
-        <p id={`${fieldId}-hint`} className="pl-9 text-ink-soft">
+        <p id={`${fieldId}-hint`} className="-mt-2 pl-9 text-ink-soft">
           {hint}
         </p>
       ) : null}

@@ -118,7 +118,7 @@ export function DataTable({
                       <SortMark sorted={sorted} />
                     </button>
                   ) : (
-                    column.header
+                    <span className="inline-flex min-h-target items-center">{column.header}</span>
                   )}
                 </th>
               );

@@ -29,11 +29,11 @@ export function ErrorSummary({
       className="rounded border-2 border-l-8 border-danger bg-danger-tint px-4 py-3 text-ink"
     >
       <h2 className="text-lg text-danger">{title}</h2>
-      <ul className="mt-1 grid list-disc gap-1 pl-5">
+      <ul className="mt-1 list-disc pl-5">
         {errors.map((error) => (
-          <li key={`${error.path}:${error.message}`}>
+          <li key={`${error.path}:${error.message}`} className="py-1">
             {error.path ? (
-              <a href={`#${error.path}`} className="inline-block py-1 font-semibold text-danger underline">
+              <a href={`#${error.path}`} className="font-semibold text-danger underline">
                 {error.message}
               </a>
             ) : (

@@ -54,7 +54,11 @@ export function Field({
   children,
 }: FieldText & { id: string; children: (control: ControlAttributes) => ReactNode }) {
   return (
-    <div className={error ? 'grid gap-1.5 border-l-4 border-danger pl-3' : 'grid gap-1.5'}>
+    <div
+      className={
+        error ? 'grid content-start gap-1.5 border-l-4 border-danger pl-3' : 'grid content-start gap-1.5'
+      }
+    >
       <label htmlFor={id} className="font-semibold">
         {label}
         {optional ? <span className="font-normal text-ink-soft"> (optional)</span> : null}

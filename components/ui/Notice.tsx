@@ -68,7 +68,7 @@ export function Notice({
       <svg viewBox="0 0 20 20" className={cx('mt-0.5 size-5 shrink-0', word)} aria-hidden="true">
         {mark}
       </svg>
-      <div className="grid min-w-0 grow gap-1">
+      <div className="grid min-w-0 grow content-start gap-1">
         {title ? <p className={cx('font-bold', word)}>{title}</p> : null}
         {children ? <div className="max-w-prose">{children}</div> : null}
         {action ? <div className="mt-1">{action}</div> : null}

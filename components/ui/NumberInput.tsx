@@ -1,5 +1,5 @@
 import { useId, type ComponentProps } from 'react';
-import { controlClass } from './control-style';
+import { textControlClass } from './control-style';
 import { cx } from './cx';
 import { Field, type FieldText } from './Field';
 
@@ -57,7 +57,7 @@ export function NumberInput({
             inputMode={whole ? 'numeric' : 'decimal'}
             autoComplete="off"
             className={cx(
-              controlClass,
+              textControlClass,
               'numerals min-w-0 text-right text-lg',
               large && 'min-h-dock text-2xl',
               suffix && 'rounded-r-none border-r-0',

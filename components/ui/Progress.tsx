@@ -5,7 +5,7 @@
 export function Progress({ label, value, max = 100 }: { label: string; value?: number; max?: number }) {
   const share = value === undefined ? null : Math.min(1, Math.max(0, max > 0 ? value / max : 0));
   return (
-    <div className="grid gap-1">
+    <div className="grid content-start gap-1">
       <span className="flex justify-between gap-4">
         <span>{label}</span>
         {share === null ? null : <span className="numerals">{Math.round(share * 100)} %</span>}

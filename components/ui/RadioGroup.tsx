@@ -36,7 +36,7 @@ export function RadioGroup({
   const segmented = look === 'segmented';
   return (
     <fieldset
-      className={cx('grid min-w-0 gap-1.5', className)}
+      className={cx('grid min-w-0 content-start gap-1.5', className)}
       aria-describedby={described['aria-describedby']}
     >
       <legend className="float-left mb-1.5 font-semibold">

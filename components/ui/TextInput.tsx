@@ -1,5 +1,5 @@
 import { useId, type ComponentProps } from 'react';
-import { controlClass } from './control-style';
+import { textControlClass } from './control-style';
 import { cx } from './cx';
 import { Field, type FieldText } from './Field';
 
@@ -27,7 +27,7 @@ export function TextInput({
           {...control}
           name={name}
           type={type}
-          className={cx(controlClass, large && 'min-h-dock text-lg', className)}
+          className={cx(textControlClass, large && 'min-h-dock text-lg', className)}
         />
       )}
     </Field>

@@ -1,5 +1,5 @@
 import { useId, type ComponentProps } from 'react';
-import { controlClass } from './control-style';
+import { textControlClass } from './control-style';
 import { cx } from './cx';
 import { Field, type FieldText } from './Field';
 
@@ -21,7 +21,13 @@ export function Textarea({
   return (
     <Field id={id ?? name ?? ownId} label={label} hint={hint} error={error} optional={optional}>
       {(control) => (
-        <textarea {...rest} {...control} name={name} rows={rows} className={cx(controlClass, className)} />
+        <textarea
+          {...rest}
+          {...control}
+          name={name}
+          rows={rows}
+          className={cx(textControlClass, className)}
+        />
       )}
     </Field>
   );

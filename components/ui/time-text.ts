@@ -8,7 +8,8 @@ const months = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', '
 export function dayText(date: string): string {
   const match = /^(\d{4})-(\d{2})-(\d{2})$/.exec(date);
   const at = match ? new Date(`${date}T00:00:00Z`) : new Date(NaN);
-  if (!match || Number.isNaN(at.getTime())) throw new RangeError(`not a calendar day: ${date}`);
+  if (!match || Number.isNaN(at.getTime()) || at.getUTCDate() !== Number(match[3]))
+    throw new RangeError(`not a calendar day: ${date}`);
   return `${weekdays[at.getUTCDay()]} ${at.getUTCDate()} ${months[at.getUTCMonth()]} ${at.getUTCFullYear()}`;
 }
 

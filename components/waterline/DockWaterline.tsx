@@ -70,7 +70,10 @@ function Berth({ unit, scale }: { unit: WaterlineUnit; scale: Scale }) {
         </svg>
         <span className="numerals block truncate text-sm font-bold">{unit.fleetNumber}</span>
         <span
-          className={cx('numerals block truncate text-sm', afloat ? 'text-ink-soft' : 'font-bold text-held')}
+          className={cx(
+            'numerals block text-sm tracking-tighter whitespace-nowrap',
+            afloat ? 'text-ink-soft' : 'font-bold text-held',
+          )}
         >
           {shortAmount(unit)}
         </span>

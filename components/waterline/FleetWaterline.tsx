@@ -6,7 +6,6 @@ import { chooseScale, distanceFromTop, placeUnit, type Scale, type WaterlineUnit
 export type FleetDock = { key: string; name: string; href?: string; units: WaterlineUnit[] };
 
 const states: UnitState[] = ['ready', 'out', 'held'];
-const fills: Record<UnitState, string> = { ready: 'fill-ready', out: 'fill-out', held: 'fill-held' };
 
 /**
  * Every dock as a strip on one scale for the whole fleet, so docks compare: a bar for each unit, standing
@@ -16,6 +15,10 @@ export function FleetWaterline({ docks, label }: { docks: FleetDock[]; label: st
   const scale = chooseScale(docks.flatMap((dock) => dock.units));
   return (
     <section aria-label={label} className="grid gap-6">
+      <p className="text-sm text-ink-soft">
+        The top of each strip is {scale.tenths / 10} h or {scale.days} days left before the next hold. Solid
+        bars are ready, hollow ones out, split ones held.
+      </p>
       {docks.map((dock) => (
         <div
           key={dock.key}
@@ -66,15 +69,27 @@ function Strip({ units, scale }: { units: WaterlineUnit[]; scale: Scale }) {
       {placed.map(({ unit, height }, index) => {
         const y = distanceFromTop(height, 90);
         const tall = Math.max(3, Math.abs(y - water));
-        return (
+        const bar = { y: height >= 0 ? water - tall : water, height: tall };
+        const x = index * 10 + 2;
+        if (unit.state === 'held') {
+          return (
+            <g key={unit.fleetNumber} className="fill-held">
+              <rect {...bar} x={x} width="2" />
+              <rect {...bar} x={x + 4} width="2" />
+            </g>
+          );
+        }
+        return unit.state === 'out' ? (
           <rect
+            {...bar}
             key={unit.fleetNumber}
-            x={index * 10 + 2}
-            y={height >= 0 ? water - tall : water}
+            x={x}
             width="6"
-            height={tall}
-            className={fills[unit.state]}
+            vectorEffect="non-scaling-stroke"
+            className="fill-paper stroke-out stroke-2"
           />
+        ) : (
+          <rect {...bar} key={unit.fleetNumber} x={x} width="6" className="fill-ready" />
         );
       })}
       <rect y={water - 1} width="100%" height="2" className="fill-line" />

@@ -16,18 +16,33 @@ export function Hull({ state, beyond = false }: { state: UnitState; beyond?: boo
   return (
     <g className={cx(fills[state])}>
       <path
-        d="M1 12.5 3 11h9l2.5-4H22l3 2.6 1-6.1 5.5-1.3.6 2-4.1 1.2 1.4 4.4C34.500 10 40 10.500 43.500 11.500 41.500 17 37 21.500 30 21.500H7.500C4.500 21.500 2 19 1 12.500Z"
+        d="M1 14C5 13 7 9.5 12 9c3-.2 5 1 8 2s4 0 5.5-2 3.5-2 5.5-.8C35 10.5 39 12 43.5 12.5 41 17.5 36 21.5 29 21.5H7C4 21.5 1.5 18.5 1 14Z"
         fill={solid ? 'currentColor' : 'none'}
         stroke="currentColor"
         strokeWidth={solid ? 1 : 2}
         strokeLinejoin="round"
         className={solid ? undefined : 'fill-paper'}
       />
-      {state === 'held' ? <path d="M7 16.500h29" className="stroke-paper" strokeWidth="3" /> : null}
+      <path
+        d="m25.5 8.5-3-5m-3 .5 5-2"
+        fill="none"
+        stroke="currentColor"
+        strokeWidth="2.2"
+        strokeLinecap="round"
+      />
+      {state === 'held' ? null : (
+        <path
+          d="M2 15.5c14 1 28 .2 40-2"
+          fill="none"
+          strokeWidth="1.4"
+          className={solid ? 'stroke-paper' : 'stroke-current'}
+        />
+      )}
+      {state === 'held' ? <path d="M7 16.5h29" className="stroke-paper" strokeWidth="3" /> : null}
       {state === 'out' ? (
-        <path d="M6 11V0l9 3-9 3" fill="none" stroke="currentColor" strokeWidth="2" />
+        <path d="M5 10v-12l9 3.2-9 3.2" fill="none" stroke="currentColor" strokeWidth="2" />
       ) : null}
-      {beyond ? <path d="m18-3 4-4 4 4" fill="none" stroke="currentColor" strokeWidth="2" /> : null}
+      {beyond ? <path d="m29-3 4-4 4 4" fill="none" stroke="currentColor" strokeWidth="2" /> : null}
     </g>
   );
 }

@@ -19,9 +19,10 @@ export function Waterline({ unit, tall = false }: { unit: WaterlineUnit; tall?: 
   return (
     <figure className="keep-together">
       <figcaption className="sr-only">{unitText(unit)}</figcaption>
-      <div aria-hidden="true" className="px-1 pt-16 pb-12">
+      <div aria-hidden="true" className={cx('px-1 pt-24', afloat ? 'pb-2' : 'pb-24')}>
         <svg className={cx('block w-full overflow-visible', tall ? 'h-72' : 'h-52')}>
           <rect y={top(0)} width="100%" height={`${100 - distanceFromTop(0, 100)}%`} className="fill-shoal" />
+          {afloat ? null : <rect y="100%" width="100%" height="5.5rem" className="fill-shoal" />}
           {ticksOf(scale).map((tick) => (
             <g key={tick.height} className="fill-ink-soft">
               <line
@@ -39,8 +40,12 @@ export function Waterline({ unit, tall = false }: { unit: WaterlineUnit; tall?: 
                 className="stroke-line"
                 strokeWidth="2"
               />
-              <Tick x="0" y={top(tick.height)} anchor="start" text={`${signed(tick.hours)} h`} />
-              <Tick x="100%" y={top(tick.height)} anchor="end" text={`${signed(tick.days)} d`} />
+              {limit ? (
+                <>
+                  <Tick x="0" y={top(tick.height)} anchor="start" text={`${signed(tick.hours)} h`} />
+                  <Tick x="100%" y={top(tick.height)} anchor="end" text={`${signed(tick.days)} d`} />
+                </>
+              ) : null}
             </g>
           ))}
           <line x1="0" x2="100%" y1={top(0)} y2={top(0)} className="stroke-line" strokeWidth="4" />
@@ -58,14 +63,17 @@ export function Waterline({ unit, tall = false }: { unit: WaterlineUnit; tall?: 
               <Hull state={unit.state} beyond={beyond && afloat} />
             </g>
             <text
-              x={halfWidth + 10}
-              y={afloat ? -6 : 40}
+              y={afloat ? -hullHeight * magnify - 14 : hullHeight * magnify + 30}
+              textAnchor="middle"
+              paintOrder="stroke"
+              strokeWidth="8"
               className={cx(
-                'numerals text-2xl font-bold',
-                limit && limit.amount < 0 ? 'fill-held' : 'fill-ink',
+                'font-bold',
+                limit ? 'numerals text-3xl' : 'text-2xl',
+                afloat ? 'fill-ink stroke-paper' : 'fill-held stroke-shoal',
               )}
             >
-              {shortAmount(unit)}
+              {limit ? shortAmount(unit) : 'no hold ahead'}
             </text>
           </svg>
         </svg>

@@ -11,10 +11,10 @@ export function daysText(days: number): string {
   return `${Math.abs(days)} ${Math.abs(days) === 1 ? 'day' : 'days'}`;
 }
 
-/** The limit that comes sooner in a few letters: "12.4 h", "−3 d", "no limit". */
+/** The limit that comes sooner in a few letters: "12.4 h", "−3 d"; a dash without a limit. */
 export function shortAmount(unit: WaterlineUnit): string {
   const limit = governingLimit(unit);
-  if (!limit) return 'no limit';
+  if (!limit) return '–';
   const amount = limit.by === 'hours' ? hoursText(limit.amount) : `${Math.abs(limit.amount)} d`;
   return limit.amount < 0 ? `−${amount}` : amount;
 }
