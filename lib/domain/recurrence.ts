@@ -101,7 +101,7 @@ function* monthlySteps({ rule, start, startParts, skip }: Series, from: number):
   }
 }
 
-function* periodSteps(series: Series, from: number): Generator<number> {
+function* periodSteps(series: Series, from: number, last: number): Generator<number> {
   const { rule, start } = series;
   const first = periodOrdinal(rule, start);
   const wanted = rule.count === null ? periodOrdinal(rule, Math.max(from, start)) : first;
@@ -110,31 +110,38 @@ function* periodSteps(series: Series, from: number): Generator<number> {
   let limit = (rule.count === null ? Math.max(from, start) : start) + HORIZON_DAYS;
   for (; ; ordinal += rule.interval) {
     const { begin, days } = daysOfPeriod(series, ordinal);
-    if (begin > Math.min(limit, LAST_DAY)) return;
+    if (begin > Math.min(limit, last)) return;
     for (const number of days) {
       if (number < start) continue;
-      if (left-- <= 0) return;
       limit = number + HORIZON_DAYS;
       if (number >= from) yield number;
+      if (--left === 0) return;
     }
   }
 }
 
-function* numbersFrom(rule: Recurrence, start: CalendarDay, from: number, skip: Skip): Generator<number> {
+/** Occurrences from one day number to another, or as far as the rule goes. */
+function* numbersBetween(
+  rule: Recurrence,
+  start: CalendarDay,
+  skip: Skip,
+  from: number,
+  to = LAST_DAY,
+): Generator<number> {
   const first = numberOfDay(start);
   const series: Series = { rule, start: first, startParts: partsOfNumber(first), skip };
-  const last = rule.until === null ? LAST_DAY : Math.min(LAST_DAY, numberOfDay(rule.until));
+  const last = rule.until === null ? to : Math.min(to, numberOfDay(rule.until));
   const stepsByDay = rule.freq === 'DAILY' || rule.freq === 'WEEKLY';
   const steps = !isPlain(rule) ? periodSteps : stepsByDay ? dailySteps : monthlySteps;
   if (from > last) return;
-  for (const number of steps(series, from)) {
+  for (const number of steps(series, from, last)) {
     if (number > last) return;
     yield number;
   }
 }
 
 function firstFrom(rule: Recurrence, start: CalendarDay, from: number, skip: Skip): CalendarDay | null {
-  for (const number of numbersFrom(rule, start, from, skip)) return dayOfNumber(number);
+  for (const number of numbersBetween(rule, start, skip, from)) return dayOfNumber(number);
   return null;
 }
 
@@ -166,11 +173,6 @@ export function occurrencesBetween(
   to: CalendarDay,
   skip: Skip = 'omit',
 ): CalendarDay[] {
-  const last = numberOfDay(to);
-  const found: CalendarDay[] = [];
-  for (const number of numbersFrom(rule, start, numberOfDay(from), skip)) {
-    if (number > last) break;
-    found.push(dayOfNumber(number));
-  }
-  return found;
+  const numbers = numbersBetween(rule, start, skip, numberOfDay(from), Math.min(numberOfDay(to), LAST_DAY));
+  return Array.from(numbers, dayOfNumber);
 }
