@@ -136,10 +136,12 @@ export interface OutingTable {
   unit_id: string;
   dock_id: string;
   started_at: MaybeInstant;
+  checked_out_by: string | null;
   due_back_at: MaybeInstant;
   planned_tenths: number | null;
   renter_reference: string | null;
   ended_at: MaybeInstant;
+  checked_in_by: string | null;
   ended_dock_id: string | null;
   voided_at: MaybeInstant;
   voided_by: string | null;
@@ -153,7 +155,7 @@ export interface ReadingTable {
   shown_tenths: number;
   base_tenths: number;
   engine_hours_tenths: ColumnType<number, never, never>;
-  source: 'entry' | 'check_in' | 'swap_final' | 'swap_first' | 'closure' | 'correction';
+  source: 'entry' | 'check_in' | 'logged' | 'swap_final' | 'swap_first' | 'closure' | 'correction';
   outing_id: string | null;
   recorded_at: DefaultInstant;
   recorded_by: string | null;

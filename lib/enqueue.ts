@@ -1,6 +1,8 @@
-import { sql, type Kysely } from 'kysely';
+import { sql, type Kysely, type RawBuilder } from 'kysely';
 import type { DB } from '@/db/tables';
 import type { JobName, JobPayload } from '@/lib/schemas/jobs';
+
+type JobOptions = { key?: string; runAt?: Date };
 
 /**
  * Puts a job on the worker's queue in the caller's transaction: it exists if and only if what was written does.
@@ -11,9 +13,17 @@ export async function enqueue<N extends JobName>(
   db: Kysely<DB>,
   name: N,
   payload: JobPayload<N>,
-  options: { key?: string; runAt?: Date } = {},
+  options: JobOptions = {},
 ): Promise<void> {
+  await sql`select ${jobFragment(name, payload, options)}`.execute(db);
+}
+
+/** The SQL expression that puts a job on the queue, for a statement that writes and enqueues in one. */
+export function jobFragment<N extends JobName>(
+  name: N,
+  payload: JobPayload<N>,
+  options: JobOptions = {},
+): RawBuilder<unknown> {
   const key = options.key ? `${name}:${options.key}` : null;
-  await sql`select graphile_worker.add_job(${name}, ${JSON.stringify(payload)}::json,
-    run_at => ${options.runAt ?? null}::timestamptz, job_key => ${key})`.execute(db);
+  return sql`put_job(${name}::text, ${JSON.stringify(payload)}::json, ${options.runAt ?? null}::timestamptz, ${key}::text)`;
 }
