@@ -17,20 +17,32 @@ export const day = z
   .refine(isCalendarDay, 'is not a day that exists (YYYY-MM-DD)');
 
 /** An instant with its offset, after RFC 3339; parsed to a Date. */
-export const instant = z.iso.datetime({
-  offset: true,
-  error: 'is not an instant (RFC 3339, with its offset)',
-});
+export const instant = z.iso
+  .datetime({ offset: true, error: 'is not an instant (RFC 3339, with its offset)' })
+  .transform((text) => new Date(text));
 
-export const id = z.uuid('is not an id (a UUID)');
+/** A UUID, in the lower case the database answers with. */
+export const id = z.uuid('is not an id (a UUID)').toLowerCase();
+
+/** Line breaks and tabs are text; the other control characters are not, and the database keeps no NUL. */
+const CONTROLS = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/;
 
 /** One line of text that says something. */
 export const line = (max: number) =>
-  z.string('give text').trim().min(1, 'is empty').max(max, `is longer than ${max} characters`);
+  z
+    .string('give text')
+    .trim()
+    .min(1, 'is empty')
+    .max(max, `is longer than ${max} characters`)
+    .refine((value) => !/[\u0000-\u001f\u007f]/.test(value), 'has a line break or a control character');
 
 /** Free text, possibly several lines. */
 export const text = (max: number) =>
-  z.string('give text').trim().max(max, `is longer than ${max} characters`);
+  z
+    .string('give text')
+    .trim()
+    .max(max, `is longer than ${max} characters`)
+    .refine((value) => !CONTROLS.test(value), 'has a control character');
 
 export const idParams = z.object({ id });
 
