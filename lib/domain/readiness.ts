@@ -4,14 +4,16 @@ import type { DuePoint, Standing } from './due';
 import { formatTenths } from './meter';
 import { countOf, describeDay } from './words';
 
-export type HoldReason = 'overdue' | 'defect' | 'laid_up' | 'not_assessed';
+export type HoldReason = 'overdue' | 'defect' | 'laid_up' | 'not_assessed' | 'too_little_left';
 
 /** One reason why a unit may not be hired out now, with what its words need. */
 export type Hold =
   | { reason: 'overdue'; ruleName: string; point: DuePoint; standing: Standing }
   | { reason: 'defect'; title: string }
   | { reason: 'laid_up'; note?: string | null }
-  | { reason: 'not_assessed'; ruleName?: string | null };
+  | { reason: 'not_assessed'; ruleName?: string | null }
+  /** Not for every outing: fewer hours are left before a hold than are planned. */
+  | { reason: 'too_little_left'; ruleName: string; leftTenths: number; plannedTenths: number };
 
 function describeOverdue(point: DuePoint, standing: Standing): string {
   switch (point.on) {
@@ -48,6 +50,11 @@ export function describeHold(hold: Hold): string {
       return hold.ruleName
         ? `Not yet assessed: the due points of ${hold.ruleName} have not been computed.`
         : 'Not yet assessed: its due points have not been computed.';
+    case 'too_little_left':
+      return (
+        `${formatTenths(hold.leftTenths)} h are left before ${hold.ruleName} holds the unit, ` +
+        `less than the ${formatTenths(hold.plannedTenths)} h planned.`
+      );
   }
 }
 
@@ -62,6 +69,8 @@ export function describeLift(hold: Pick<Hold, 'reason'> & { ruleName?: string | 
       return 'Lifted when a manager brings the unit back into service.';
     case 'not_assessed':
       return 'Lifted by the worker within seconds; if it stays, tell a manager that the worker may be down.';
+    case 'too_little_left':
+      return `Plan a shorter outing, or have the task${hold.ruleName ? ` for ${hold.ruleName}` : ''} closed first.`;
   }
 }
 
@@ -113,4 +122,26 @@ export function computeRoom(
     }
   }
   return room;
+}
+
+/** What is left by each measure, with the rule that holds first by it. */
+export type RoomByMeasure = {
+  tenths: number | null;
+  hoursRuleId: string | null;
+  outings: number | null;
+  outingsRuleId: string | null;
+  days: number | null;
+  daysRuleId: string | null;
+};
+
+/** The rule that holds first, as `computeRoom` chooses it: hours and outings turned into days at a pace. */
+export function findNearestRule(room: RoomByMeasure, pace: Pace = USUAL_PACE): string | null {
+  const inDays = (left: number | null, perDay: number) =>
+    left === null ? Infinity : left / Math.max(perDay, 0.01);
+  const choices = [
+    { days: inDays(room.tenths, pace.tenthsPerDay), ruleId: room.hoursRuleId },
+    { days: inDays(room.outings, pace.outingsPerDay), ruleId: room.outingsRuleId },
+    { days: inDays(room.days, 1), ruleId: room.daysRuleId },
+  ];
+  return choices.reduce((nearest, choice) => (choice.days < nearest.days ? choice : nearest)).ruleId;
 }
