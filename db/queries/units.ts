@@ -1,4 +1,11 @@
-import { sql, type Insertable, type Kysely, type Selectable, type Transaction } from 'kysely';
+import {
+  sql,
+  type Insertable,
+  type Kysely,
+  type Selectable,
+  type Transaction,
+  type Updateable,
+} from 'kysely';
 import type { DB, LiveMeterTable, UnitTable } from '../tables';
 
 /** A unit with what its model, dock and live meter say of it. */
@@ -50,9 +57,19 @@ export function insertUnit(db: Kysely<DB>, row: Insertable<UnitTable>) {
 
 /**
  * Locks units against every other writer of their facts, in order of id so that two writers cannot wait for each
- * other, and counts the write on each meter. Answers the live meters.
+ * other, and counts the write on each meter. Answers the live meters as they were.
  */
 export async function lockUnits(
+  trx: Transaction<DB>,
+  ids: readonly string[],
+): Promise<Map<string, LiveMeterRow>> {
+  const meters = await lockMeters(trx, ids);
+  await countWrites(trx, ids);
+  return meters;
+}
+
+/** Locks as `lockUnits` does without counting a write, for whoever may find that there is nothing to write. */
+export async function lockMeters(
   trx: Transaction<DB>,
   ids: readonly string[],
 ): Promise<Map<string, LiveMeterRow>> {
@@ -63,10 +80,22 @@ export async function lockUnits(
     .orderBy('unit_id')
     .forUpdate()
     .execute();
+  return new Map(rows.map((row) => [row.unit_id, row]));
+}
+
+/** Tells every writer who has read these units' facts without a lock that they have changed. */
+export async function countWrites(trx: Transaction<DB>, ids: readonly string[]): Promise<void> {
   await trx
     .updateTable('live_meter')
     .set((eb) => ({ revision: eb('revision', '+', 1) }))
     .where('unit_id', 'in', [...ids])
     .execute();
-  return new Map(rows.map((row) => [row.unit_id, row]));
+}
+
+export function insertLiveMeter(trx: Transaction<DB>, row: Insertable<LiveMeterTable>) {
+  return trx.insertInto('live_meter').values(row).execute();
+}
+
+export function updateUnit(trx: Transaction<DB>, id: string, row: Updateable<UnitTable>) {
+  return trx.updateTable('unit').set(row).where('id', '=', id).execute();
 }

@@ -1,3 +1,7 @@
+import { findDefect, type DefectRow } from '@/db/queries/defects';
+import { findLayUp, type LayUpRow } from '@/db/queries/lay-ups';
+import { findMeterFacts, type MeterFactsAsked } from '@/db/queries/meter-facts';
+import { findReading, type ReadingRow } from '@/db/queries/readings';
 import { findUnit, type UnitRow } from '@/db/queries/units';
 import { findTask, type TaskRow } from '@/db/queries/tasks';
 import { findDock, type DockRow } from '@/db/queries/docks';
@@ -43,10 +47,7 @@ export async function accessUnit(
   act: DockAct,
   path = 'id',
 ): Promise<Checked<UnitRow>> {
-  const row = await findUnit(ctx.db, unitId);
-  if (!row) throw refuseField(path, 'is no unit of this fleet', 'not_found');
-  requireAtDock(ctx, act, row.dock_id, path);
-  return row as Checked<UnitRow>;
+  return checkRow(ctx, await findUnit(ctx.db, unitId), act, [path, 'unit']);
 }
 
 /** The rule, ended or in force. Throws `forbidden`, or `not_found` on `path`. */
@@ -69,10 +70,39 @@ export async function accessTask(
   act: DockAct,
   path = 'id',
 ): Promise<Checked<TaskRow>> {
-  const row = await findTask(ctx.db, taskId);
-  if (!row) throw refuseField(path, 'is no task of this fleet', 'not_found');
+  return checkRow(ctx, await findTask(ctx.db, taskId), act, [path, 'task']);
+}
+
+/** The row, if there is one and the actor may do this at its dock. Throws `not_found` on `path`, or `forbidden`. */
+function checkRow<Row extends { dock_id: string }>(
+  ctx: Context,
+  row: Row | undefined,
+  act: DockAct,
+  [path, noun]: [path: string, noun: string],
+): Checked<Row> {
+  if (!row) throw refuseField(path, `is no ${noun} of this fleet`, 'not_found');
   requireAtDock(ctx, act, row.dock_id, path);
-  return row as Checked<TaskRow>;
+  return row as Checked<Row>;
+}
+
+/** What a reading of the unit is held against, at this instant. Throws `not_found` on `unitId`, or `forbidden`. */
+export async function accessMeterFacts(ctx: Context, asked: MeterFactsAsked, act: DockAct) {
+  return checkRow(ctx, await findMeterFacts(ctx.db, asked), act, ['unitId', 'unit']);
+}
+
+/** The reading, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
+export async function accessReading(ctx: Context, id: string, act: DockAct): Promise<Checked<ReadingRow>> {
+  return checkRow(ctx, await findReading(ctx.db, id), act, ['id', 'reading']);
+}
+
+/** The defect, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
+export async function accessDefect(ctx: Context, id: string, act: DockAct): Promise<Checked<DefectRow>> {
+  return checkRow(ctx, await findDefect(ctx.db, id), act, ['id', 'defect']);
+}
+
+/** The lay-up, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
+export async function accessLayUp(ctx: Context, id: string, act: DockAct): Promise<Checked<LayUpRow>> {
+  return checkRow(ctx, await findLayUp(ctx.db, id), act, ['id', 'lay-up']);
 }
 
 function forbidden(): Refusal {
