@@ -1,0 +1,33 @@
+import type { Insertable, Kysely, Selectable, Transaction } from 'kysely';
+import type { DB, OutingTable } from '../tables';
+
+export type OutingRow = Selectable<OutingTable>;
+
+export function findOuting(db: Kysely<DB>, id: string): Promise<OutingRow | undefined> {
+  return db.selectFrom('outing').selectAll().where('id', '=', id).executeTakeFirst();
+}
+
+export function findOpenOuting(db: Kysely<DB>, unitId: string): Promise<OutingRow | undefined> {
+  return db
+    .selectFrom('outing')
+    .selectAll()
+    .where('unit_id', '=', unitId)
+    .where('ended_at', 'is', null)
+    .where('voided_at', 'is', null)
+    .executeTakeFirst();
+}
+
+/** When the unit's last outing ended, or null. */
+export async function findLastReturn(db: Kysely<DB>, unitId: string): Promise<Date | null> {
+  const row = await db
+    .selectFrom('outing')
+    .select((eb) => eb.fn.max('ended_at').as('at'))
+    .where('unit_id', '=', unitId)
+    .where('voided_at', 'is', null)
+    .executeTakeFirst();
+  return row?.at ?? null;
+}
+
+export function insertOuting(trx: Transaction<DB>, row: Insertable<OutingTable>): Promise<OutingRow> {
+  return trx.insertInto('outing').values(row).returningAll().executeTakeFirstOrThrow();
+}

@@ -1,0 +1,40 @@
+import { listReadiness } from '@/db/queries/readiness';
+import type { Context } from '@/lib/context';
+import { visibleDocks } from '@/lib/domain/access';
+import type { Availability, AvailabilityQuery } from '@/lib/schemas/availability';
+import { toTenths } from '@/lib/schemas/schedule-shape';
+import { accessDock } from './access';
+import { toHolds, toStanding } from './shape-readiness';
+
+const byFleetNumber = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
+
+/**
+ * Which units may be hired out, which are out, and which are held and why, read at this moment: no job has to have
+ * run. `on` asks about another day, `hours` about an outing of that length. Units come in the natural order of
+ * their fleet numbers. Throws `not_found` or `forbidden` on `dockId`.
+ */
+export async function getAvailability(ctx: Context, query: AvailabilityQuery): Promise<Availability> {
+  const dockIds = query.dockId
+    ? [(await accessDock(ctx, query.dockId, 'unit.read')).id]
+    : visibleDocks(ctx.actor);
+  const onDay = query.on ?? null;
+  const plannedTenths = query.hours === undefined ? null : toTenths(query.hours);
+  const rows = await listReadiness(ctx.db, { dockIds }, ctx.now, onDay);
+  rows.sort((a, b) => byFleetNumber.compare(a.fleet_number, b.fleet_number));
+  const answer: Availability = { asOf: ctx.now.toISOString(), ready: [], out: [], held: [] };
+  for (const row of rows) {
+    const unit = toStanding(row);
+    const holds = toHolds(row, { at: ctx.now, onDay, plannedTenths });
+    if (row.outing_id)
+      answer.out.push({
+        ...unit,
+        outingId: row.outing_id,
+        startedAt: row.started_at?.toISOString() ?? null,
+        dueBackAt: row.due_back_at?.toISOString() ?? null,
+        holds,
+      });
+    else if (holds.length > 0) answer.held.push({ ...unit, holds });
+    else answer.ready.push(unit);
+  }
+  return answer;
+}
