@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import { RadioGroup } from '@/components/ui/RadioGroup';
 import { chooseTheme, parseTheme, type Theme } from '@/lib/client/theme';
 
@@ -13,9 +13,10 @@ const options = [
 /** Light, dark, or as the device says; kept in a cookie on this device. `theme` is what is in force now. */
 export function ThemeChoice({ theme }: { theme: Theme }) {
   const [chosen, setChosen] = useState(theme);
+  const name = useId();
   return (
     <RadioGroup
-      name="theme"
+      name={name}
       label="Light or dark"
       look="segmented"
       options={options}

@@ -29,15 +29,18 @@ export function ErrorSummary({
       className="rounded border-2 border-l-8 border-danger bg-danger-tint px-4 py-3 text-ink"
     >
       <h2 className="text-lg text-danger">{title}</h2>
-      <ul className="mt-1 list-disc pl-5">
+      <ul className="mt-1">
         {errors.map((error) => (
-          <li key={`${error.path}:${error.message}`} className="py-1">
+          <li key={`${error.path}:${error.message}`}>
             {error.path ? (
-              <a href={`#${error.path}`} className="font-semibold text-danger underline">
+              <a
+                href={`#${error.path}`}
+                className="flex min-h-target items-center font-semibold text-danger underline"
+              >
                 {error.message}
               </a>
             ) : (
-              error.message
+              <span className="flex min-h-target items-center">{error.message}</span>
             )}
           </li>
         ))}

@@ -32,12 +32,14 @@ export function RadioGroup({
 }: RadioGroupProps) {
   const ownId = useId();
   const groupId = id ?? ownId;
-  const { id: _, ...described } = describeControl(groupId, { hint, error });
+  const described = describeControl(groupId, { hint, error });
   const segmented = look === 'segmented';
   return (
     <fieldset
       className={cx('grid min-w-0 content-start gap-1.5', className)}
+      role="radiogroup"
       aria-describedby={described['aria-describedby']}
+      aria-invalid={described['aria-invalid']}
     >
       <legend className="float-left mb-1.5 font-semibold">
         {label}
@@ -56,7 +58,7 @@ export function RadioGroup({
               'flex cursor-pointer items-center gap-3',
               large ? 'min-h-dock' : 'min-h-target',
               segmented &&
-                'border-2 border-edge bg-raised px-4 font-semibold not-first:-ml-0.5 first:rounded-l last:rounded-r has-checked:z-10 has-checked:border-act has-checked:bg-act has-checked:text-act-ink has-focus-visible:z-10 has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-sign',
+                'relative border-2 border-edge bg-raised px-4 font-semibold not-first:-ml-0.5 first:rounded-l last:rounded-r has-checked:z-10 has-checked:border-act has-checked:bg-act has-checked:text-act-ink has-focus-visible:z-10 has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-sign',
               option.disabled && 'cursor-not-allowed text-ink-soft',
             )}
           >
@@ -68,8 +70,7 @@ export function RadioGroup({
               checked={value === undefined ? undefined : value === option.value}
               defaultChecked={defaultValue === undefined ? undefined : defaultValue === option.value}
               disabled={option.disabled || rest.disabled}
-              aria-invalid={described['aria-invalid']}
-              className={segmented ? 'sr-only' : 'size-6 shrink-0'}
+              className={segmented ? 'absolute inset-0 cursor-pointer opacity-0' : 'size-6 shrink-0'}
             />
             <span>
               {option.label}

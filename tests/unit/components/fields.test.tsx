@@ -62,7 +62,7 @@ test('one of a few is chosen with radio buttons in a named group', () => {
       ]}
     />,
   );
-  expect(screen.getByRole('group', { name: 'Counts from' })).toBeTruthy();
+  expect(screen.getByRole('radiogroup', { name: 'Counts from' })).toBeTruthy();
   const completed = screen.getByRole<HTMLInputElement>('radio', { name: 'Completion' });
   fireEvent.click(completed);
   expect(completed.checked).toBe(true);
