@@ -5,8 +5,20 @@ const config = [
   {
     ignores: ['.next*/**', '.wakewright/**', 'node_modules/**', 'coverage/**', 'public/**', 'next-env.d.ts'],
   },
-  { linterOptions: { noInlineConfig: true } },
+  { linterOptions: { noInlineConfig: true, reportUnusedDisableDirectives: 'error' } },
   ...coreWebVitals,
   ...typescript,
+  {
+    rules: {
+      '@typescript-eslint/no-explicit-any': 'error',
+      '@typescript-eslint/no-unused-vars': ['error', { ignoreRestSiblings: true, argsIgnorePattern: '^_' }],
+    },
+  },
+  {
+    // Playwright's fixtures are handed a function called `use`, which the rule takes for React's.
+    files: ['tests/e2e/**', 'tests/support/**'],
+    rules: { 'react-hooks/rules-of-hooks': 'off' },
+  },
 ];
+
 export default config;
