@@ -14,10 +14,13 @@ import { postgresHome } from './state-folder';
 const NAME = 'wakewright';
 const LOADING = 'wakewright_loading';
 
-export const startEmbeddedServer = (root: string): Promise<LocalServer> =>
-  step('Starting PostgreSQL', async () =>
-    startLocalServer({ directory: path.join(await postgresHome(root), 'postgres') }),
-  );
+/** Starts the private server, and says where its data are when that is not inside the project. */
+export async function startEmbeddedServer(root: string): Promise<LocalServer> {
+  const home = await postgresHome(root);
+  if (!home.startsWith(root))
+    console.log(`• PostgreSQL’s user cannot reach this folder; its data are in ${home}.`);
+  return step('Starting PostgreSQL', () => startLocalServer({ directory: path.join(home, 'postgres') }));
+}
 
 /** True when the database at `url` holds no operator's data. */
 export async function isEmpty(url: string): Promise<boolean> {
