@@ -26,12 +26,12 @@ export default defineConfig({
       project('integration', {
         globalSetup: 'tests/support/integration-setup.ts',
         testTimeout: 30_000,
-        hookTimeout: 60_000,
+        hookTimeout: 240_000,
       }),
       project('faults', {
         globalSetup: 'tests/support/integration-setup.ts',
         testTimeout: 120_000,
-        hookTimeout: 60_000,
+        hookTimeout: 240_000,
       }),
     ],
   },

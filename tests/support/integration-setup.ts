@@ -7,7 +7,7 @@ declare module 'vitest' {
   }
 }
 
-/** Vitest's global set-up of the integration tests: a PostgreSQL with a migrated template. */
+/** Vitest's global set-up of tests that need a database: PostgreSQL with a migrated template. */
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
   const server = await openTestServer();
   project.provide('serverUrl', server.serverUrl);
