@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { isCalendarDay } from '@/lib/domain/calendar-day';
 import { firstOnOrAfter, parseRecurrence } from '@/lib/domain/recurrence';
 import { count, day, hours } from './common';
 
@@ -31,7 +32,7 @@ const calendar = z
     const refuse = (message: string) => ctx.addIssue({ code: 'custom', path: ['rrule'], message });
     const parsed = parseRecurrence(trigger.rrule);
     if (!parsed.ok) refuse(parsed.reason);
-    else if (!firstOnOrAfter(parsed.recurrence, trigger.start, trigger.start))
+    else if (isCalendarDay(trigger.start) && !firstOnOrAfter(parsed.recurrence, trigger.start, trigger.start))
       refuse(`names no day from ${trigger.start} on`);
   });
 

@@ -1,0 +1,118 @@
+import { createHash, randomUUID } from 'node:crypto';
+import { readdirSync } from 'node:fs';
+import { createServer, type IncomingMessage, type ServerResponse } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import path from 'node:path';
+import { afterAll, beforeAll } from 'vitest';
+import { getDatabase } from '@/db/client';
+import type { Role } from '@/lib/domain/access';
+
+type Handler = (request: Request, route: { params: Promise<Record<string, string>> }) => Promise<Response>;
+type Route = { pattern: RegExp; names: string[]; file: string };
+
+export type Answer<T = Record<string, unknown>> = { status: number; body: T };
+/** A person who calls `/api/v1`; paths begin after that. `body` that is a string is sent as it is. */
+export type Caller = {
+  personId: string;
+  name: string;
+  send: <T = Record<string, unknown>>(method: string, path: string, body?: unknown) => Promise<Answer<T>>;
+};
+
+const ROOT = path.join(process.cwd(), 'app/api/v1');
+
+function listRoutes(): Route[] {
+  return readdirSync(ROOT, { recursive: true, encoding: 'utf8' })
+    .filter((file) => path.basename(file) === 'route.ts')
+    .map((file) => {
+      const folders = path.dirname(file).split(path.sep);
+      const pieces = folders.map((folder) => (folder.startsWith('[') ? '([^/]+)' : folder));
+      return {
+        file: path.join(ROOT, file),
+        names: folders.filter((folder) => folder.startsWith('[')).map((folder) => folder.slice(1, -1)),
+        pattern: new RegExp(`^/api/v1/${pieces.join('/')}$`),
+      };
+    })
+    .sort((a, b) => a.names.length - b.names.length);
+}
+
+async function answer(routes: Route[], incoming: IncomingMessage, outgoing: ServerResponse): Promise<void> {
+  const url = new URL(incoming.url ?? '/', `http://${incoming.headers.host}`);
+  const route = routes.find(({ pattern }) => pattern.test(url.pathname));
+  const module = route && ((await import(/* @vite-ignore */ route.file)) as Record<string, Handler>);
+  const handler = module?.[incoming.method ?? 'GET'];
+  if (!route || !handler) return void outgoing.writeHead(route ? 405 : 404).end();
+  const values = route.pattern.exec(url.pathname)!.slice(1);
+  const chunks = (await incoming.toArray()) as Buffer[];
+  const request = new Request(url, {
+    method: incoming.method,
+    headers: new Headers(incoming.headers as Record<string, string>),
+    ...(chunks.length > 0 && { body: Buffer.concat(chunks) }),
+  });
+  const params = Object.fromEntries(route.names.map((name, index) => [name, values[index] ?? '']));
+  const response = await handler(request, { params: Promise.resolve(params) });
+  outgoing.writeHead(response.status, Object.fromEntries(response.headers));
+  outgoing.end(Buffer.from(await response.arrayBuffer()));
+}
+
+/**
+ * Serves the API's routes over HTTP on the test file's database, without the pages and so without a build.
+ * `caller()` adds a person with an API key.
+ */
+export function testApi(database: { url: string }): {
+  caller(role: Role, options?: { dockIds?: string[]; name?: string }): Promise<Caller>;
+} {
+  const routes = listRoutes();
+  const server = createServer((incoming, outgoing) => {
+    answer(routes, incoming, outgoing).catch((error: unknown) => outgoing.destroy(error as Error));
+  });
+  let baseUrl = '';
+  beforeAll(async () => {
+    await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+    baseUrl = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
+    Object.assign(process.env, {
+      DATABASE_URL: database.url,
+      SMTP_URL: 'smtp://127.0.0.1:9',
+      PUBLIC_URL: baseUrl,
+      AUTH_SECRET: 'tests-only: qX3vN8rLw2Zt6KdYp0Hs5Bf',
+    });
+  });
+  afterAll(async () => {
+    server.close();
+    await getDatabase().destroy();
+  });
+
+  return {
+    caller: async (role, { dockIds = [], name = role } = {}) => {
+      const { personId, key } = await addPerson(role, dockIds, name);
+      const send: Caller['send'] = async (method, to, body) => {
+        const response = await fetch(`${baseUrl}/api/v1${to}`, {
+          method,
+          headers: { authorization: `Bearer ${key}`, 'content-type': 'application/json' },
+          ...(body !== undefined && { body: typeof body === 'string' ? body : JSON.stringify(body) }),
+        });
+        const text = await response.text();
+        return { status: response.status, body: text ? JSON.parse(text) : null };
+      };
+      return { personId, name, send };
+    },
+  };
+}
+
+async function addPerson(role: Role, dockIds: string[], name: string) {
+  const key = `test-${randomUUID()}`;
+  const { id } = await getDatabase()
+    .insertInto('person')
+    .values({ email: `${randomUUID()}@wakewright.example`, name, role, dock_ids: dockIds })
+    .returning('id')
+    .executeTakeFirstOrThrow();
+  await getDatabase()
+    .insertInto('api_key')
+    .values({
+      person_id: id,
+      name: 'test',
+      prefix: 'test',
+      key_hash: createHash('sha256').update(key).digest(),
+    })
+    .execute();
+  return { personId: id, key };
+}
