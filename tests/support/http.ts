@@ -38,8 +38,8 @@ function listRoutes(): Route[] {
 async function answer(routes: Route[], incoming: IncomingMessage, outgoing: ServerResponse): Promise<void> {
   const url = new URL(incoming.url ?? '/', `http://${incoming.headers.host}`);
   const route = routes.find(({ pattern }) => pattern.test(url.pathname));
-  const module = route && ((await import(/* @vite-ignore */ route.file)) as Record<string, Handler>);
-  const handler = module?.[incoming.method ?? 'GET'];
+  const verbs = route && ((await import(/* @vite-ignore */ route.file)) as Record<string, Handler>);
+  const handler = verbs?.[incoming.method ?? 'GET'];
   if (!route || !handler) return void outgoing.writeHead(route ? 405 : 404).end();
   const values = route.pattern.exec(url.pathname)!.slice(1);
   const chunks = (await incoming.toArray()) as Buffer[];
