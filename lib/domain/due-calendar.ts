@@ -1,17 +1,11 @@
-import { type CalendarDay, addDays } from './calendar-day';
-import { firstAfter, firstOnOrAfter, isPlain, occurrencesBetween, parseRecurrence } from './recurrence';
-import type { Skip } from './recurrence-days';
+import { type CalendarDay, dayOfNumber, numberOfDay } from './calendar-day';
+import { firstNumberFrom, isPlain, numbersBetween, parseRecurrence, seriesOf } from './recurrence';
+import type { Series } from './recurrence-days';
 import type { Recurrence } from './recurrence-parts';
 import type { CalendarTrigger, Window } from './rule';
 
-/** Where the replay of a calendar trigger stands: the series it is on, and the occurrence now due. */
-export type CalendarCursor = {
-  anchor: CalendarTrigger['anchor'];
-  rule: Recurrence;
-  start: CalendarDay;
-  skip: Skip;
-  dueOn: CalendarDay | null;
-};
+/** Where the replay of a calendar trigger stands: its series, and the occurrence now due as a day number. */
+export type CalendarCursor = { anchor: CalendarTrigger['anchor']; series: Series; due: number | null };
 
 function readRule(text: string): Recurrence {
   const parsed = parseRecurrence(text);
@@ -19,29 +13,38 @@ function readRule(text: string): Recurrence {
   return parsed.recurrence;
 }
 
+/** The day a replay has come to, or null when its rule is used up. */
+export function dueDayOf({ due }: CalendarCursor): CalendarDay | null {
+  return due === null ? null : dayOfNumber(due);
+}
+
 /** The first occurrence on or after both the rule's start and the day the unit entered service. */
 export function beginCalendar(trigger: CalendarTrigger, enteredServiceOn: CalendarDay): CalendarCursor {
-  const rule = readRule(trigger.rrule);
-  const skip: Skip = trigger.anchor === 'completed' ? 'backward' : 'omit';
-  const from = trigger.start > enteredServiceOn ? trigger.start : enteredServiceOn;
-  const dueOn = firstOnOrAfter(rule, trigger.start, from, skip);
-  return { anchor: trigger.anchor, rule, start: trigger.start, skip, dueOn };
+  const { rrule, start, anchor } = trigger;
+  const skip = anchor === 'completed' ? 'backward' : 'omit';
+  const series = seriesOf(readRule(rrule), numberOfDay(start), skip);
+  const due = firstNumberFrom(series, Math.max(series.start, numberOfDay(enteredServiceOn)));
+  return { anchor, series, due };
 }
 
 /**
- * The rule begun again on the day of a closing. COUNT is of the whole duty: what was due up to now is used
- * up, and the day of the closing itself, where it fits, must not use up one more.
+ * What is left of a rule with COUNT when it begins again on a day. COUNT is of the whole duty: what was due
+ * up to now is used up, and the day of the closing itself, where it fits the rule, must not use up one more.
  */
-function restart(cursor: CalendarCursor, dueOn: CalendarDay, on: CalendarDay): CalendarCursor {
-  const { rule, start, skip, anchor } = cursor;
-  let next = rule;
-  if (rule.count !== null) {
-    const left = rule.count - occurrencesBetween(rule, start, start, dueOn, skip).length;
-    if (left <= 0) return { ...cursor, dueOn: null };
-    const fitsItself = firstOnOrAfter({ ...rule, count: null }, on, on, 'backward') === on;
-    next = { ...rule, count: left + (fitsItself ? 1 : 0) };
-  }
-  return { anchor, rule: next, start: on, skip: 'backward', dueOn: firstAfter(next, on, on, 'backward') };
+function withCountLeft(series: Series, due: number, on: number): Recurrence | null {
+  const { rule, start } = series;
+  if (rule.count === null) return rule;
+  const left = rule.count - [...numbersBetween(series, start, due)].length;
+  if (left <= 0) return null;
+  const endless = seriesOf({ ...rule, count: null }, on, 'backward');
+  return { ...rule, count: firstNumberFrom(endless, on) === on ? left + 1 : left };
+}
+
+function restart({ anchor, series, due }: CalendarCursor, on: number): CalendarCursor {
+  const rule = due === null ? null : withCountLeft(series, due, on);
+  if (rule === null) return { anchor, series, due: null };
+  const next = seriesOf(rule, on, 'backward');
+  return { anchor, series: next, due: firstNumberFrom(next, on + 1) };
 }
 
 /**
@@ -50,13 +53,13 @@ function restart(cursor: CalendarCursor, dueOn: CalendarDay, on: CalendarDay): C
  * FREQ and INTERVAL alone begins again; one that names places in the calendar keeps them: too early leaves
  * the occurrence due, too late moves to the first one after the closing.
  */
-export function closeCalendar(cursor: CalendarCursor, on: CalendarDay, window: Window): CalendarCursor {
-  const { anchor, rule, start, skip, dueOn } = cursor;
-  if (dueOn === null) return cursor;
-  if (anchor === 'completed') return restart(cursor, dueOn, on);
-  const early = on < addDays(dueOn, -window.earlyDays);
-  const late = on > addDays(dueOn, window.lateDays);
-  if (!early && !late) return { ...cursor, dueOn: firstAfter(rule, start, dueOn, skip) };
-  if (isPlain(rule)) return restart(cursor, dueOn, on);
-  return early ? cursor : { ...cursor, dueOn: firstAfter(rule, start, on, skip) };
+export function closeCalendar(cursor: CalendarCursor, on: number, window: Window): CalendarCursor {
+  const { anchor, series, due } = cursor;
+  if (due === null) return cursor;
+  if (anchor === 'completed') return restart(cursor, on);
+  const early = on < due - window.earlyDays;
+  const late = on > due + window.lateDays;
+  if ((early || late) && isPlain(series.rule)) return restart(cursor, on);
+  if (early) return cursor;
+  return { anchor, series, due: firstNumberFrom(series, (late ? on : due) + 1) };
 }

@@ -4,8 +4,8 @@
  * Each trigger is computed by itself by replaying the closings of its rule, in the order they happened,
  * from the first due point; one closing answers all triggers, and the rule is due when its first trigger is.
  */
-import { type CalendarDay, addDays } from './calendar-day';
-import { type CalendarCursor, beginCalendar, closeCalendar } from './due-calendar';
+import { type CalendarDay, addDays, numberOfDay } from './calendar-day';
+import { type CalendarCursor, beginCalendar, closeCalendar, dueDayOf } from './due-calendar';
 import type { MeterTrigger, Schedule, Trigger, Window } from './rule';
 
 /** That the work was done: on which day, at what engine hours and outing count of the unit. */
@@ -53,7 +53,7 @@ function replayCalendar(
   { enteredServiceOn, closings }: History,
 ): CalendarCursor {
   return closings.reduce(
-    (cursor, { on }) => closeCalendar(cursor, on, window),
+    (cursor, { on }) => closeCalendar(cursor, numberOfDay(on), window),
     beginCalendar(trigger, enteredServiceOn),
   );
 }
@@ -70,7 +70,7 @@ export function computeDuePoint(
   history: History,
 ): DuePoint | null {
   if (trigger.on === 'calendar') {
-    const { dueOn } = replayCalendar(trigger, window, history);
+    const dueOn = dueDayOf(replayCalendar(trigger, window, history));
     if (dueOn === null) return null;
     return {
       on: 'calendar',
@@ -152,9 +152,10 @@ export function computeFollowing(
   }
   const following: CalendarDay[] = [];
   let cursor = replayCalendar(trigger, window, history);
-  while (cursor.dueOn && following.length < count) {
-    cursor = closeCalendar(cursor, cursor.dueOn, window);
-    if (cursor.dueOn) following.push(cursor.dueOn);
+  while (cursor.due !== null && following.length < count) {
+    cursor = closeCalendar(cursor, cursor.due, window);
+    const next = dueDayOf(cursor);
+    if (next !== null) following.push(next);
   }
   return following;
 }

@@ -45,16 +45,16 @@ function fitsWeekNo({ byWeekNo, weekStart }: Recurrence, number: number): boolea
 
 function fitsByDay(rule: Recurrence, number: number, { year, month, day }: DateParts): boolean {
   const weekday = weekdayIndex(number);
-  const withinMonth = rule.freq === 'MONTHLY' || rule.byMonth.length > 0;
-  return rule.byDay.some((wanted) => {
-    if (wanted.weekday !== weekday) return false;
+  for (const wanted of rule.byDay) {
+    if (wanted.weekday !== weekday) continue;
     if (wanted.nth === null) return true;
+    const withinMonth = rule.freq === 'MONTHLY' || rule.byMonth.length > 0;
     const before = withinMonth ? day - 1 : number - numberOfDate(year, 1, 1);
     const length = withinMonth ? daysInMonth(year, month) : isLeapYear(year) ? 366 : 365;
-    return wanted.nth > 0
-      ? Math.floor(before / 7) + 1 === wanted.nth
-      : Math.floor((length - 1 - before) / 7) + 1 === -wanted.nth;
-  });
+    const aside = wanted.nth > 0 ? before : length - 1 - before;
+    if (Math.floor(aside / 7) + 1 === Math.abs(wanted.nth)) return true;
+  }
+  return false;
 }
 
 /** What a rule leaves unsaid is taken from its start (RFC 5545 section 3.3.10). */
@@ -127,6 +127,7 @@ export function daysOfPeriod(series: Series, ordinal: number): { begin: number; 
     const [year, month] = [Math.floor(ordinal / 12), (ordinal % 12) + 1];
     return expand(numberOfDate(year, month, 1), daysOfMonth(series, year, month));
   }
-  const months = Array.from({ length: 12 }, (_, index) => daysOfMonth(series, ordinal, index + 1));
-  return expand(numberOfDate(ordinal, 1, 1), months.flat());
+  const days: number[] = [];
+  for (let month = 1; month <= 12; month++) days.push(...daysOfMonth(series, ordinal, month));
+  return expand(numberOfDate(ordinal, 1, 1), days);
 }

@@ -101,36 +101,32 @@ export const PARTS = {
 
 export type PartName = keyof typeof PARTS;
 
+type Clash = { part: PartName; reason: string };
+const clashOf = (part: PartName, reason: string): Clash => ({ part, reason: `${part} ${reason}` });
+
+function findDayClash({ freq, byMonth, byWeekNo, byDay }: Recurrence): Clash | undefined {
+  const largest = byDay.reduce((most, { nth }) => Math.max(most, Math.abs(nth ?? 0)), 0);
+  if (largest === 0) return undefined;
+  if (freq !== 'MONTHLY' && freq !== 'YEARLY') {
+    return clashOf('BYDAY', 'takes a number only with MONTHLY or YEARLY');
+  }
+  if (byWeekNo.length > 0) return clashOf('BYDAY', 'takes no number beside BYWEEKNO');
+  const withinMonth = freq === 'MONTHLY' || byMonth.length > 0;
+  return withinMonth && largest > 5 ? clashOf('BYDAY', 'counts at most 5 within a month') : undefined;
+}
+
 /** Why parts do not go together by RFC 5545 section 3.3.10, or undefined when they do. */
-export function findClash(rule: Recurrence): { part: PartName; reason: string } | undefined {
-  const { freq } = rule;
-  const nth = rule.byDay.some((day) => day.nth !== null);
-  const withinMonth = freq === 'MONTHLY' || rule.byMonth.length > 0;
-  const others = [rule.byMonth, rule.byWeekNo, rule.byYearDay, rule.byMonthDay, rule.byDay];
-  const clashes: [boolean, PartName, string][] = [
-    [rule.interval > MAX_INTERVAL[freq], 'INTERVAL', `is at most ${MAX_INTERVAL[freq]} with FREQ=${freq}`],
-    [rule.count !== null && rule.until !== null, 'UNTIL', 'cannot stand beside COUNT'],
-    [rule.byMonthDay.length > 0 && freq === 'WEEKLY', 'BYMONTHDAY', 'cannot be used with FREQ=WEEKLY'],
-    [rule.byYearDay.length > 0 && freq !== 'YEARLY', 'BYYEARDAY', 'needs FREQ=YEARLY'],
-    [rule.byWeekNo.length > 0 && freq !== 'YEARLY', 'BYWEEKNO', 'needs FREQ=YEARLY'],
-    [
-      rule.byWeekNo.length > 0 && rule.byDay.length === 0,
-      'BYWEEKNO',
-      'needs BYDAY to name the day of the week',
-    ],
-    [nth && freq !== 'MONTHLY' && freq !== 'YEARLY', 'BYDAY', 'takes a number only with MONTHLY or YEARLY'],
-    [nth && rule.byWeekNo.length > 0, 'BYDAY', 'takes no number beside BYWEEKNO'],
-    [
-      nth && withinMonth && rule.byDay.some((day) => Math.abs(day.nth ?? 1) > 5),
-      'BYDAY',
-      'counts at most 5 within a month',
-    ],
-    [
-      rule.bySetPos.length > 0 && others.every((list) => list.length === 0),
-      'BYSETPOS',
-      'needs another BY part to choose from',
-    ],
-  ];
-  const clash = clashes.find(([found]) => found);
-  return clash && { part: clash[1], reason: `${clash[1]} ${clash[2]}` };
+export function findClash(rule: Recurrence): Clash | undefined {
+  const { freq, byMonth, byWeekNo, byYearDay, byMonthDay, byDay, bySetPos } = rule;
+  if (rule.interval > MAX_INTERVAL[freq]) {
+    return clashOf('INTERVAL', `is at most ${MAX_INTERVAL[freq]} with FREQ=${freq}`);
+  }
+  if (rule.count !== null && rule.until !== null) return clashOf('UNTIL', 'cannot stand beside COUNT');
+  if (byMonthDay.length && freq === 'WEEKLY') return clashOf('BYMONTHDAY', 'cannot be used with FREQ=WEEKLY');
+  if (byYearDay.length && freq !== 'YEARLY') return clashOf('BYYEARDAY', 'needs FREQ=YEARLY');
+  if (byWeekNo.length && freq !== 'YEARLY') return clashOf('BYWEEKNO', 'needs FREQ=YEARLY');
+  if (byWeekNo.length && !byDay.length) return clashOf('BYWEEKNO', 'needs BYDAY to name the day of the week');
+  const others = byMonth.length + byWeekNo.length + byYearDay.length + byMonthDay.length + byDay.length;
+  if (bySetPos.length && others === 0) return clashOf('BYSETPOS', 'needs another BY part to choose from');
+  return findDayClash(rule);
 }

@@ -36,8 +36,9 @@ export function parseRecurrence(text: string): ParsedRecurrence {
   const draft: Partial<Recurrence> = {};
   const seen = new Set<string>();
   for (const piece of text.trim().toUpperCase().split(';')) {
-    const [, name, value] = /^([A-Z-]+)=(.+)$/.exec(piece) ?? [];
-    if (name === undefined || value === undefined) {
+    const equals = piece.indexOf('=');
+    const [name, value] = [piece.slice(0, equals), piece.slice(equals + 1)];
+    if (equals < 1 || value === '' || !/^[A-Z-]+$/.test(name)) {
       return refuse(piece || 'rule', `"${piece}" is not a rule part such as FREQ=MONTHLY`);
     }
     if (!(name in PARTS)) {
@@ -68,8 +69,8 @@ export function parseRecurrence(text: string): ParsedRecurrence {
 
 /** Whether a rule has no BY part: it steps from its start and names no places in the calendar. */
 export function isPlain(rule: Recurrence): boolean {
-  const lists = [rule.byMonth, rule.byWeekNo, rule.byYearDay, rule.byMonthDay, rule.byDay, rule.bySetPos];
-  return lists.every((list) => list.length === 0);
+  const { byMonth, byWeekNo, byYearDay, byMonthDay, byDay } = rule;
+  return !(byMonth.length || byWeekNo.length || byYearDay.length || byMonthDay.length || byDay.length);
 }
 
 function* dailySteps({ rule, start }: Series, from: number): Generator<number> {
@@ -120,29 +121,33 @@ function* periodSteps(series: Series, from: number, last: number): Generator<num
   }
 }
 
-/** Occurrences from one day number to another, or as far as the rule goes. */
-function* numbersBetween(
-  rule: Recurrence,
-  start: CalendarDay,
-  skip: Skip,
-  from: number,
-  to = LAST_DAY,
-): Generator<number> {
-  const first = numberOfDay(start);
-  const series: Series = { rule, start: first, startParts: partsOfNumber(first), skip };
+/** A rule from its start, both as day numbers, for computing with many occurrences of it. */
+export function seriesOf(rule: Recurrence, start: number, skip: Skip): Series {
+  return { rule, start, startParts: partsOfNumber(start), skip };
+}
+
+/** Occurrences of a series from one day number to another, or as far as the rule goes, in order. */
+export function* numbersBetween(series: Series, from: number, to = LAST_DAY): Generator<number> {
+  const { rule } = series;
   const last = rule.until === null ? to : Math.min(to, numberOfDay(rule.until));
+  if (from > last) return;
   const stepsByDay = rule.freq === 'DAILY' || rule.freq === 'WEEKLY';
   const steps = !isPlain(rule) ? periodSteps : stepsByDay ? dailySteps : monthlySteps;
-  if (from > last) return;
   for (const number of steps(series, from, last)) {
     if (number > last) return;
     yield number;
   }
 }
 
-function firstFrom(rule: Recurrence, start: CalendarDay, from: number, skip: Skip): CalendarDay | null {
-  for (const number of numbersBetween(rule, start, skip, from)) return dayOfNumber(number);
+/** The first occurrence of a series on a day number or later, or null when it is used up. */
+export function firstNumberFrom(series: Series, from: number): number | null {
+  for (const number of numbersBetween(series, from)) return number;
   return null;
+}
+
+function firstFrom(rule: Recurrence, start: CalendarDay, from: number, skip: Skip): CalendarDay | null {
+  const number = firstNumberFrom(seriesOf(rule, numberOfDay(start), skip), from);
+  return number === null ? null : dayOfNumber(number);
 }
 
 /** The first occurrence on `day` or later, or null when the rule is used up. Throws for an unreal day. */
@@ -173,6 +178,7 @@ export function occurrencesBetween(
   to: CalendarDay,
   skip: Skip = 'omit',
 ): CalendarDay[] {
-  const numbers = numbersBetween(rule, start, skip, numberOfDay(from), Math.min(numberOfDay(to), LAST_DAY));
-  return Array.from(numbers, dayOfNumber);
+  const series = seriesOf(rule, numberOfDay(start), skip);
+  const last = Math.min(numberOfDay(to), LAST_DAY);
+  return Array.from(numbersBetween(series, numberOfDay(from), last), dayOfNumber);
 }
