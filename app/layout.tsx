@@ -16,8 +16,8 @@ export const viewport: Viewport = {
   initialScale: 1,
   viewportFit: 'cover',
   themeColor: [
-    { media: '(prefers-color-scheme: light)', color: '#fbf9f2' },
-    { media: '(prefers-color-scheme: dark)', color: '#07151c' },
+    { media: '(prefers-color-scheme: light)', color: '#f5ebd0' },
+    { media: '(prefers-color-scheme: dark)', color: '#282414' },
   ],
 };
 

@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
+import { ToastProvider } from '@/components/ui/Toast';
 import type { Theme } from '@/lib/client/theme';
 import { LagLine } from './LagLine';
 import { MoreMenu } from './MoreMenu';
@@ -20,7 +21,10 @@ export type StaffShellProps = {
   children: ReactNode;
 };
 
-/** The frame of every signed-in screen. Decides nothing: what may be seen arrives as `nav`. */
+/**
+ * The frame of every signed-in screen, with room for toasts. Decides nothing: what may be seen arrives as
+ * `nav`.
+ */
 export function StaffShell({
   nav,
   homeHref,
@@ -33,7 +37,7 @@ export function StaffShell({
 }: StaffShellProps) {
   const { bar, more } = splitNav(nav);
   return (
-    <>
+    <ToastProvider>
       <a
         href="#content"
         className="sr-only z-50 bg-act px-5 py-3 font-bold text-act-ink focus:not-sr-only focus:fixed focus:top-2 focus:left-2"
@@ -94,6 +98,6 @@ export function StaffShell({
           </li>
         </ul>
       </nav>
-    </>
+    </ToastProvider>
   );
 }

@@ -14,15 +14,23 @@ const top = (height: number) => `${distanceFromTop(height, 100)}%`;
  */
 export function DockWaterline({ units, label }: { units: WaterlineUnit[]; label: string }) {
   const scale = chooseScale(units);
+  const longest = Math.max(0, ...units.map((unit) => unit.fleetNumber.length));
   return (
     <figure>
       <figcaption className="mb-1 flex flex-wrap justify-between gap-x-6 text-sm text-ink-soft">
         <span className="font-semibold text-ink">{label}</span>
         <span>
-          One step is <Step scale={scale} />. Above the line: left before the next hold. Below: past it.
+          One step is <Step scale={scale} />. Above the line: left before the next hold. Below: past it. A
+          pennant is out, a crossbar is held.
         </span>
       </figcaption>
-      <ul className={cx('waterline-rows', scale.steps === 2 ? 'waterline-coarse' : 'waterline-fine')}>
+      <ul
+        className={cx(
+          'waterline-rows',
+          scale.steps === 2 ? 'waterline-coarse' : 'waterline-fine',
+          longest > 7 && 'waterline-wide',
+        )}
+      >
         {units.map((unit) => (
           <li key={unit.fleetNumber} className="min-w-0">
             <Berth unit={unit} scale={scale} />

@@ -1,7 +1,16 @@
 import Link from 'next/link';
 import { StateMark } from '@/components/state/StateMark';
 import type { UnitState } from '@/components/state/state-words';
-import { chooseScale, distanceFromTop, placeUnit, type Scale, type WaterlineUnit } from './geometry';
+import {
+  chooseScale,
+  distanceFromTop,
+  governingLimit,
+  placeUnit,
+  sortLowestFirst,
+  type Scale,
+  type WaterlineUnit,
+} from './geometry';
+import { limitText } from './text';
 
 export type FleetDock = { key: string; name: string; href?: string; units: WaterlineUnit[] };
 
@@ -44,6 +53,7 @@ export function FleetWaterline({ docks, label }: { docks: FleetDock[]; label: st
                 />
               ))}
             </p>
+            <Lowest units={dock.units} />
           </div>
           <Strip units={dock.units} scale={scale} />
         </div>
@@ -52,10 +62,19 @@ export function FleetWaterline({ docks, label }: { docks: FleetDock[]; label: st
   );
 }
 
+/** Names the unit that lies lowest, which is the next to cost a day's hire. */
+function Lowest({ units }: { units: WaterlineUnit[] }) {
+  const [lowest] = sortLowestFirst(units.filter((unit) => governingLimit(unit) !== null));
+  if (!lowest) return null;
+  return (
+    <p className="mt-1 text-ink-soft">
+      Lowest: <span className="numerals font-bold text-ink">{lowest.fleetNumber}</span>, {limitText(lowest)}
+    </p>
+  );
+}
+
 function Strip({ units, scale }: { units: WaterlineUnit[]; scale: Scale }) {
-  const placed = units
-    .map((unit) => ({ unit, height: placeUnit(unit, scale).height }))
-    .sort((a, b) => a.height - b.height);
+  const placed = sortLowestFirst(units).map((unit) => ({ unit, height: placeUnit(unit, scale).height }));
   const slots = Math.max(24, placed.length);
   const water = distanceFromTop(0, 90);
   return (

@@ -66,6 +66,20 @@ export function chooseScale(units: readonly WaterlineUnit[]): Scale {
   );
 }
 
+/** The units by how low they lie, those without a limit last. The array given is left as it is. */
+export function sortLowestFirst(units: readonly WaterlineUnit[]): WaterlineUnit[] {
+  const height = (unit: WaterlineUnit) => {
+    const limit = governingLimit(unit);
+    return limit ? heightOn(largest, limit) : Infinity;
+  };
+  return units.toSorted((a, b) => {
+    const [left, right] = [height(a), height(b)];
+    return left === right
+      ? a.fleetNumber.localeCompare(b.fleetNumber, 'en', { numeric: true })
+      : left - right;
+  });
+}
+
 export type Placement = {
   /** 1 at the top of the scale, 0 on the water line, `deepest` at the bottom. */
   height: number;

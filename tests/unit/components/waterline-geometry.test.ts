@@ -4,6 +4,7 @@ import {
   distanceFromTop,
   governingLimit,
   placeUnit,
+  sortLowestFirst,
   ticksOf,
   type WaterlineUnit,
 } from '@/components/waterline/geometry';
@@ -81,4 +82,26 @@ test('ticks count down from the top through the line', () => {
   expect(ticks.map((tick) => tick.hours)).toEqual([25, 20, 15, 10, 5, 0, -5, -10]);
   expect(ticks.map((tick) => tick.days)).toEqual([15, 12, 9, 6, 3, 0, -3, -6]);
   expect(ticksOf(chooseScale([unit(1, null)])).map((tick) => tick.hours)).toEqual([10, 5, 0, -5]);
+});
+
+test('the lowest unit comes first, alike ones by number, and those without a limit last', () => {
+  const named = (fleetNumber: string, tenths: number | null, days: number | null) => ({
+    ...unit(tenths, days),
+    fleetNumber,
+  });
+  const units = [
+    named('free', null, null),
+    named('NB-10', 50, null),
+    named('NB-9', null, 3),
+    named('sunk', 400, -1),
+    named('high', 900, 90),
+  ];
+  expect(sortLowestFirst(units).map((each) => each.fleetNumber)).toEqual([
+    'sunk',
+    'NB-9',
+    'NB-10',
+    'high',
+    'free',
+  ]);
+  expect(units[0]?.fleetNumber).toBe('free');
 });
