@@ -31,3 +31,17 @@ export async function findLastReturn(db: Kysely<DB>, unitId: string): Promise<Da
 export function insertOuting(trx: Transaction<DB>, row: Insertable<OutingTable>): Promise<OutingRow> {
   return trx.insertInto('outing').values(row).returningAll().executeTakeFirstOrThrow();
 }
+
+/** Marks an outing void: it never happened, and counts no more. */
+export async function voidOuting(
+  trx: Transaction<DB>,
+  id: string,
+  voided: { at: Date; by: string | null; reason: string },
+): Promise<void> {
+  await trx
+    .updateTable('outing')
+    .set({ voided_at: voided.at, voided_by: voided.by, void_reason: voided.reason })
+    .where('id', '=', id)
+    .where('voided_at', 'is', null)
+    .execute();
+}

@@ -1,4 +1,4 @@
-import { sql, type Insertable, type Kysely } from 'kysely';
+import { sql, type Insertable, type Kysely, type Transaction } from 'kysely';
 import type { DB, ReadingTable } from '../tables';
 
 /** A reading with what its unit says of it. */
@@ -28,37 +28,66 @@ export function insertReading(db: Kysely<DB>, row: Insertable<ReadingTable>) {
   return db.insertInto('reading').values(row).returning('id').executeTakeFirstOrThrow();
 }
 
-/** What a check-in wrote, as it stood then: later check-ins are not counted in `outings`. */
-export type CheckInRow = {
-  unit_id: string;
-  taken_at: Date;
-  shown_tenths: number;
-  engine_hours_tenths: number;
-  ran_tenths: number;
-  outings: number;
-  outing_id: string;
-  defect_id: string | null;
-  review_code: 'unusual_jump' | 'late_arrival' | null;
-};
+/** Marks these readings void. Answers how many were not void already. */
+export async function voidReadings(
+  trx: Transaction<DB>,
+  ids: readonly string[],
+  voided: { at: Date; by: string | null; reason: string },
+): Promise<number> {
+  const rows = await trx
+    .updateTable('reading')
+    .set({ voided_at: voided.at, voided_by: voided.by, void_reason: voided.reason })
+    .where('id', 'in', [...ids])
+    .where('voided_at', 'is', null)
+    .returning('id')
+    .execute();
+  return rows.length;
+}
 
-/** What the check-in of this id wrote. Throws when there is none. */
-export async function getCheckIn(db: Kysely<DB>, id: string): Promise<CheckInRow> {
-  const { rows } = await sql<CheckInRow>`
-    select r.unit_id, r.taken_at, r.shown_tenths, r.engine_hours_tenths, r.outing_id, r.review_code,
-           r.engine_hours_tenths - coalesce((
-             select p.engine_hours_tenths from reading p
-              where p.unit_id = r.unit_id and p.taken_at <= r.taken_at and p.id <> r.id
-                and (p.voided_at is null or p.voided_at > r.recorded_at)
-                and not (p.source in ('swap_final', 'swap_first') and p.taken_at = r.taken_at)
-              order by p.taken_at desc, p.engine_hours_tenths desc limit 1), r.engine_hours_tenths) as ran_tenths,
-           m.starting_outings + (
-             select count(*) from outing o
-              where o.unit_id = r.unit_id and o.voided_at is null
-                and (o.ended_at <= r.taken_at or o.id = r.outing_id))::int as outings,
-           (select f.id from defect f where f.unit_id = r.unit_id and f.reading_id = r.id limit 1) as defect_id
-      from reading r
-      join live_meter m on m.unit_id = r.unit_id
-     where r.id = ${id}`.execute(db);
-  if (!rows[0]) throw new Error(`no check-in ${id}`);
-  return rows[0];
+/** The readings of a unit from an instant on that are not void, the earliest first, at most 10. */
+export function listReadingsFrom(db: Kysely<DB>, unitId: string, from: Date) {
+  return db
+    .selectFrom('reading')
+    .select(['id', 'taken_at', 'shown_tenths', 'source', 'outing_id'])
+    .where('unit_id', '=', unitId)
+    .where('voided_at', 'is', null)
+    .where('taken_at', '>=', from)
+    .orderBy('taken_at')
+    .orderBy('engine_hours_tenths')
+    .limit(10)
+    .execute();
+}
+
+/** Sets the unit's live meter to what its readings and outings say that are not void. The unit must be locked. */
+export async function recountLiveMeter(trx: Transaction<DB>, unitId: string): Promise<void> {
+  await sql`
+    update live_meter m set
+      reading_id = last.id, read_at = last.taken_at, base_tenths = last.base_tenths,
+      shown_tenths = last.shown_tenths, engine_hours_tenths = last.engine_hours_tenths,
+      outing_count = m.starting_outings + (
+        select count(*) from outing o
+         where o.unit_id = ${unitId} and o.voided_at is null and o.ended_at is not null)::int
+      from (
+        select r.* from reading r
+         where r.unit_id = ${unitId} and r.voided_at is null
+         order by r.taken_at desc, r.engine_hours_tenths desc, r.source = 'swap_final' limit 1) last
+     where m.unit_id = ${unitId}`.execute(trx);
+}
+
+/** Marks the reading reviewed, if it waits for it. Answers whether it did. */
+export async function reviewReading(
+  db: Kysely<DB>,
+  id: string,
+  reviewed: { at: Date; by: string | null; note: string | null },
+): Promise<boolean> {
+  const row = await db
+    .updateTable('reading')
+    .set({ reviewed_at: reviewed.at, reviewed_by: reviewed.by, review_note: reviewed.note })
+    .where('id', '=', id)
+    .where('review_code', 'is not', null)
+    .where('reviewed_at', 'is', null)
+    .where('voided_at', 'is', null)
+    .returning('id')
+    .executeTakeFirst();
+  return row !== undefined;
 }

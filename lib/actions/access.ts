@@ -7,7 +7,14 @@ import { findTask, type TaskRow } from '@/db/queries/tasks';
 import { findDock, type DockRow } from '@/db/queries/docks';
 import { findRule, type NamedRuleRow } from '@/db/queries/rules';
 import type { Context } from '@/lib/context';
-import { canAtDock, canFleetWide, worksAt, type DockAct, type FleetAct } from '@/lib/domain/access';
+import {
+  canAtDock,
+  canFleetWide,
+  canSomewhere,
+  worksAt,
+  type DockAct,
+  type FleetAct,
+} from '@/lib/domain/access';
 import { Refusal, refuseField } from '@/lib/errors';
 
 declare const checked: unique symbol;
@@ -17,6 +24,11 @@ export type Checked<Row> = Row & { readonly [checked]: true };
 /** Throws `forbidden` unless the actor may do this, which concerns every dock. */
 export function requireFleetWide(ctx: Context, act: FleetAct): void {
   if (!canFleetWide(ctx.actor, act)) throw forbidden();
+}
+
+/** Throws `forbidden` unless the actor may do this at some dock: for lists, which narrow to the docks themselves. */
+export function requireSomewhere(ctx: Context, act: DockAct): void {
+  if (!canSomewhere(ctx.actor, act)) throw forbidden();
 }
 
 /** Throws `forbidden` unless the actor may do this at the dock; `path` names the field that chose the dock. */

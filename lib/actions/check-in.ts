@@ -1,4 +1,4 @@
-import { getCheckIn } from '@/db/queries/readings';
+import { getCheckIn } from '@/db/queries/check-ins';
 import type { Context } from '@/lib/context';
 import type { CheckIn, CreateCheckIn } from '@/lib/schemas/check-in';
 import { keepReading } from './keep-reading';

@@ -3,7 +3,7 @@ import type { MeterFacts } from '@/db/queries/meter-facts';
 import { checkMeterSwap, checkReading, computeBaseTenths, type MeterSwap } from '@/lib/domain/meter';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { refuseField } from '@/lib/errors';
-import { refuseReading } from './refuse-reading';
+import { refuseReading, requireTimeUntil } from './refuse-reading';
 
 /** A reading as somebody gives it. */
 export type Entry = {
@@ -75,13 +75,7 @@ function judgeBetween(facts: MeterFacts, entry: Entry, last: Last, now: Date) {
   const unusual = verdict.kind === 'unusual';
   if (verdict.kind !== 'ok' && !(unusual && entry.confirmReason))
     throw refuseReading(verdict, facts.time_zone);
-  const onward = next && checkReading(next, { now, last: reading });
-  if (onward?.kind === 'more_than_clock')
-    throw refuseField(
-      'hours',
-      `The meter showed ${(next!.shownTenths / 10).toFixed(1)} h on ${describeMoment(next!.at, facts.time_zone)}, more than the time between allows.`,
-      'reading_refused',
-    );
+  requireTimeUntil(reading, next, { now, timeZone: facts.time_zone, path: 'hours' });
   return { ranTenths: entry.shownTenths - last.shownTenths, unusual };
 }
 

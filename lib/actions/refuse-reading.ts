@@ -1,4 +1,4 @@
-import { formatTenths, type ReadingVerdict } from '@/lib/domain/meter';
+import { checkReading, formatTenths, type MeterReading, type ReadingVerdict } from '@/lib/domain/meter';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { Refusal, refuseField } from '@/lib/errors';
 
@@ -54,4 +54,19 @@ function describeUnusual({ ranTenths, over, usualTenths }: Extract<Refused, { ki
   return over === 'outing'
     ? `${ran} and the outing lasted ${formatTenths(usualTenths)} h.`
     : `${ran} more than the usual ${formatTenths(usualTenths)} h at most.`;
+}
+
+/** Throws `reading_refused` when the meter cannot have run from this reading to the next in the time between. */
+export function requireTimeUntil(
+  reading: MeterReading,
+  next: MeterReading | null,
+  { now, timeZone, path }: { now: Date; timeZone: string; path: string },
+): void {
+  if (!next || checkReading(next, { now, last: reading }).kind !== 'more_than_clock') return;
+  throw refuseField(
+    path,
+    `The meter showed ${formatTenths(next.shownTenths)} h on ${describeMoment(next.at, timeZone)}, ` +
+      'more than the time between allows.',
+    'reading_refused',
+  );
 }

@@ -1,0 +1,56 @@
+import {
+  listReadingsToReview,
+  listUnitReadings,
+  type After,
+  type ListedReading,
+} from '@/db/queries/reading-list';
+import type { Context } from '@/lib/context';
+import { visibleDocks } from '@/lib/domain/access';
+import { refuseField } from '@/lib/errors';
+import type { Reading, ReadingsQuery } from '@/lib/schemas/reading';
+import { accessUnit, requireSomewhere } from './access';
+import { toReading } from './shape-reading';
+
+const PAGE = 100;
+
+/**
+ * A unit's readings, void ones too, or with `review` "open" those that wait for a manager; the latest first.
+ * Throws `invalid_input` on `unitId` when neither is asked for or on `cursor`, `not_found`, and `forbidden`: the
+ * open reviews are for managers.
+ */
+export async function listReadings(
+  ctx: Context,
+  query: ReadingsQuery,
+): Promise<{ items: Reading[]; nextCursor: string | null }> {
+  const limit = query.limit ?? PAGE;
+  const after = parseCursor(query.cursor);
+  const rows = await chosen(ctx, query, after, limit + 1);
+  const items = rows.slice(0, limit).map(toReading);
+  const last = rows.length > limit ? items.at(-1) : undefined;
+  return { items, nextCursor: last ? `${last.at}_${last.id}` : null };
+}
+
+async function chosen(
+  ctx: Context,
+  query: ReadingsQuery,
+  after: After,
+  limit: number,
+): Promise<ListedReading[]> {
+  if (query.review) requireSomewhere(ctx, 'reading.review');
+  if (query.unitId) {
+    const unit = await accessUnit(ctx, query.unitId, query.review ? 'reading.review' : 'unit.read', 'unitId');
+    const rows = await listUnitReadings(ctx.db, unit.id, after, limit);
+    return query.review ? rows.filter((row) => row.review_code && !row.reviewed_at && !row.voided_at) : rows;
+  }
+  if (query.review) return listReadingsToReview(ctx.db, visibleDocks(ctx.actor), after, limit);
+  throw refuseField('unitId', 'name a unit, or ask for review=open');
+}
+
+function parseCursor(cursor: string | undefined): After {
+  if (cursor === undefined) return null;
+  const [at = '', id = ''] = cursor.split('_');
+  const takenAt = new Date(at);
+  if (Number.isNaN(takenAt.getTime()) || !/^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/.test(id))
+    throw refuseField('cursor', 'is none that a list answered');
+  return { takenAt, id };
+}
