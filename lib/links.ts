@@ -1,0 +1,6 @@
+import { env } from '@/lib/env';
+
+/** The whole address of a page of ours, for a letter: `linkTo('/tasks')`. */
+export function linkTo(path: string): string {
+  return new URL(path, env().PUBLIC_URL).href;
+}
