@@ -28,12 +28,20 @@ export type ErrorCode =
 export class Refusal extends Error {
   readonly code: ErrorCode;
   readonly errors: readonly FieldError[];
+  /** Whole seconds after which it is worth trying again; told as `Retry-After`. */
+  readonly retryAfterSeconds: number | undefined;
 
-  constructor(code: ErrorCode, message: string, errors: readonly FieldError[] = []) {
+  constructor(
+    code: ErrorCode,
+    message: string,
+    errors: readonly FieldError[] = [],
+    retryAfterSeconds?: number,
+  ) {
     super(message);
     this.name = 'Refusal';
     this.code = code;
     this.errors = errors;
+    this.retryAfterSeconds = retryAfterSeconds;
   }
 }
 

@@ -54,13 +54,19 @@ export type Problem = {
 /** A refusal, or a fault of ours, as an RFC 9457 answer. A fault tells the caller nothing but that it was one. */
 export function problemResponse(error: unknown): Response {
   const problem = problemOf(error);
+  const wait = error instanceof Refusal ? error.retryAfterSeconds : undefined;
   return new Response(JSON.stringify(problem), {
     status: problem.status,
-    headers: { 'content-type': 'application/problem+json', 'cache-control': 'no-store' },
+    headers: {
+      'content-type': 'application/problem+json',
+      'cache-control': 'no-store',
+      ...(wait !== undefined && { 'retry-after': String(wait) }),
+    },
   });
 }
 
-function problemOf(error: unknown): Problem {
+/** What an error tells the caller. */
+export function problemOf(error: unknown): Problem {
   if (error instanceof Refusal) {
     const { code } = error;
     return {
