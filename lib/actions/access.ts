@@ -6,6 +6,7 @@ import { findUnit, type UnitRow } from '@/db/queries/units';
 import { findTask, type TaskRow } from '@/db/queries/tasks';
 import { findDock, type DockRow } from '@/db/queries/docks';
 import { findRule, type NamedRuleRow } from '@/db/queries/rules';
+import { findPerson, type PersonRow } from '@/db/queries/people';
 import type { Context } from '@/lib/context';
 import {
   canAtDock,
@@ -115,6 +116,19 @@ export async function accessDefect(ctx: Context, id: string, act: DockAct): Prom
 /** The lay-up, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
 export async function accessLayUp(ctx: Context, id: string, act: DockAct): Promise<Checked<LayUpRow>> {
   return checkRow(ctx, await findLayUp(ctx.db, id), act, ['id', 'lay-up']);
+}
+
+/** The person, deactivated ones too. Throws `forbidden`, or `not_found` on `path`. */
+export async function accessPerson(
+  ctx: Context,
+  personId: string,
+  act: FleetAct,
+  path = 'id',
+): Promise<Checked<PersonRow>> {
+  requireFleetWide(ctx, act);
+  const row = await findPerson(ctx.db, personId);
+  if (!row) throw refuseField(path, 'is nobody here', 'not_found');
+  return row as Checked<PersonRow>;
 }
 
 function forbidden(): Refusal {

@@ -1,0 +1,41 @@
+import { countPasswordResets, insertPasswordReset } from '@/db/queries/password-resets';
+import { findCredentialByEmail } from '@/db/queries/people';
+import { runTransaction } from '@/db/transaction';
+import type { Context } from '@/lib/context';
+import type { AskPasswordReset } from '@/lib/schemas/password-reset';
+import { linkTo } from '@/lib/links';
+import { makeToken } from '@/lib/secrets/one-time-token';
+import { queueMail } from './queue-mail';
+import { instantInWords, writeLetter } from './write-letter';
+
+const HOUR_MS = 3_600_000;
+/** Letters a person is sent within an hour, however often somebody asks. */
+const LETTERS_AN_HOUR = 3;
+
+/**
+ * Sends a link for choosing a new password, good for one hour and one use, when somebody has this e-mail address.
+ * Answers nothing either way: nobody learns who is here.
+ */
+export async function askPasswordReset(ctx: Context, { email }: AskPasswordReset): Promise<void> {
+  const person = await findCredentialByEmail(ctx.db, email);
+  const { token, hash } = makeToken();
+  if (!person || person.deactivated_at) return;
+  const since = new Date(ctx.now.getTime() - HOUR_MS);
+  const expiresAt = new Date(ctx.now.getTime() + HOUR_MS);
+  await runTransaction(ctx.db, async (trx) => {
+    if ((await countPasswordResets(trx, person.id, since)) >= LETTERS_AN_HOUR) return;
+    await insertPasswordReset(trx, { personId: person.id, tokenHash: hash, now: ctx.now, expiresAt });
+    const letter = writeLetter({
+      kind: 'password-reset',
+      to: person.email,
+      subject: 'Choose a new password for Wakewright',
+      before: ['Somebody asked for a new password for this e-mail address.'],
+      link: { label: 'Choose a new password', href: linkTo(`/reset/${token}`) },
+      after: [
+        `The link works once, until ${instantInWords(expiresAt)}. It ends every session of yours.`,
+        'If it was not you, do nothing: your password stays as it is.',
+      ],
+    });
+    await queueMail({ ...ctx, db: trx }, letter);
+  });
+}

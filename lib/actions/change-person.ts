@@ -1,0 +1,39 @@
+import { changePerson as changePersonRow } from '@/db/queries/people';
+import { runTransaction } from '@/db/transaction';
+import type { Context } from '@/lib/context';
+import type { ChangePerson, Person } from '@/lib/schemas/person';
+import { accessPerson } from './access';
+import { checkDocks } from './check-docks';
+import { keepAManager } from './keep-a-manager';
+import { toPerson } from './shape-person';
+
+/**
+ * Changes a person's name, role or docks. Managers of all docks only. Another role or other docks end the
+ * person's sessions. Throws `not_found` on `id` or a dock, `conflict` on `role` or `dockIds` for the last
+ * manager of all docks.
+ */
+export async function changePerson(
+  ctx: Context,
+  { id, ...input }: ChangePerson & { id: string },
+): Promise<Person> {
+  await checkDocks(ctx, input.dockIds ?? []);
+  return runTransaction(ctx.db, async (trx) => {
+    const before = await accessPerson({ ...ctx, db: trx }, id, 'person.write');
+    const role = input.role ?? before.role;
+    const dockIds = [...new Set(input.dockIds ?? before.dock_ids)];
+    const moves = role !== before.role || !sameDocks(dockIds, before.dock_ids);
+    const staysManagerOfAll = role === 'manager' && dockIds.length === 0;
+    if (!staysManagerOfAll) await keepAManager(trx, id, role === 'manager' ? 'dockIds' : 'role');
+    const change = {
+      name: input.name ?? before.name,
+      role,
+      dock_ids: dockIds,
+      ...(role !== 'manager' && { digest_wanted: false }),
+    };
+    return toPerson(await changePersonRow(trx, id, change, { endSessions: moves }));
+  });
+}
+
+function sameDocks(left: readonly string[], right: readonly string[]): boolean {
+  return left.length === right.length && left.every((id) => right.includes(id));
+}

@@ -1,0 +1,9 @@
+import { z } from 'zod';
+import { linkToken } from './invitation';
+import { email, newPassword } from './person';
+
+export const askPasswordReset = z.strictObject({ email });
+export const resetPassword = z.strictObject({ token: linkToken, password: newPassword });
+
+export type AskPasswordReset = z.output<typeof askPasswordReset>;
+export type ResetPassword = z.output<typeof resetPassword>;
