@@ -71,6 +71,12 @@ const schema = z.object({
   AUTH_SECRET: secret,
   MAIL_FROM: mailbox.default('Wakewright <wakewright@localhost>'),
   SETUP_TOKEN: z.string().min(16, 'must be at least 16 characters long').optional(),
+  TRUST_PROXY: z.coerce
+    .number({ error: 'must be a number' })
+    .int('must be a whole number')
+    .min(0, 'must be at least 0')
+    .max(10, 'must be at most 10')
+    .default(0),
   DB_POOL_MAX: count(200).default(10),
   WORKER_CONCURRENCY: count(50).default(4),
   WORKER_BEAT_MS: count(5_000, 200).default(5_000),
@@ -129,6 +135,11 @@ export const VARIABLES: readonly Variable[] = [
     meaning: 'guards the form that sets up an empty database; 16 characters or more',
     default: 'made and printed at start',
   },
+  {
+    name: 'TRUST_PROXY',
+    meaning: 'how many proxies in front of us add to `X-Forwarded-For`; 0 takes the address of the socket',
+    default: '`0`',
+  },
   { name: 'DB_POOL_MAX', meaning: 'database connections a process may hold', default: '`10`' },
   { name: 'WORKER_CONCURRENCY', meaning: 'jobs the worker runs at a time', default: '`4`' },
   {
@@ -175,3 +186,6 @@ let cached: Env | undefined;
 export function env(): Env {
   return (cached ??= parseEnv(process.env));
 }
+
+/** Whether the development server runs us. */
+export const isDevelopment = (): boolean => process.env.NODE_ENV === 'development';

@@ -21,7 +21,8 @@ export async function readJson(request: Request): Promise<unknown> {
   }
 }
 
-async function readText(request: Request): Promise<string> {
+/** The request's body as text. Throws `too_large` beyond `MAX_BODY_BYTES`. */
+export async function readText(request: Request): Promise<string> {
   const tooLarge = new Refusal('too_large', `A body is at most ${MAX_BODY_BYTES / 1024} KiB.`);
   if (Number(request.headers.get('content-length') ?? 0) > MAX_BODY_BYTES) throw tooLarge;
   if (!request.body) return '';
