@@ -33,7 +33,7 @@ describe('the house', () => {
     expect(new Set(excused), 'an excuse that nothing needs any more').toEqual(
       new Set(Object.keys(LONG_FOR_A_REASON)),
     );
-  });
+  }, 60_000);
 });
 
 describe('a break of the house is found', () => {
