@@ -325,6 +325,7 @@ export interface DigestTable {
   claimed_at: Instant;
   sent_at: MaybeInstant;
   failure: string | null;
+  mail_id: string | null;
 }
 
 export interface MailTable {
@@ -337,6 +338,7 @@ export interface MailTable {
   headers: DefaultJson<Record<string, string>>;
   queued_at: DefaultInstant;
   claimed_at: MaybeInstant;
+  claim_id: string | null;
   sent_at: MaybeInstant;
   failure: string | null;
 }

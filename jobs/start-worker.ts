@@ -42,7 +42,7 @@ export async function startWorker(env: Env, onGone: (why: string) => void): Prom
     events,
     logger: queueLogger(env.LOG_LEVEL),
     taskList: Object.fromEntries(
-      Object.entries(TASKS).map(([name, task]) => [name, (payload: unknown) => task(ctx(), payload)]),
+      Object.entries(TASKS).map(([name, task]) => [name, (payload: unknown) => task(ctx(), payload, env)]),
     ),
     parsedCronItems: CRON_ITEMS,
     // Completions in batches are retried and waited for at the end; single ones are neither.

@@ -5,11 +5,14 @@ declare module 'smtp-server' {
   interface Session {
     envelope: { mailFrom: { address: string } | false; rcptTo: { address: string }[] };
   }
+  type Done = (error?: Error | null) => void;
   interface Options {
     authOptional?: boolean;
     disabledCommands?: string[];
     banner?: string;
-    onData?(stream: Readable, session: Session, done: (error?: Error | null) => void): void;
+    onConnect?(session: Session, done: Done): void;
+    onRcptTo?(address: { address: string }, session: Session, done: Done): void;
+    onData?(stream: Readable, session: Session, done: Done): void;
   }
   export class SMTPServer {
     constructor(options: Options);

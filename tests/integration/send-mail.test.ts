@@ -1,0 +1,115 @@
+import { afterEach, beforeEach, expect, test } from 'vitest';
+import { simpleParser } from 'mailparser';
+import { sql } from 'kysely';
+import { queueMail } from '@/lib/actions/queue-mail';
+import type { Worker } from '@/jobs/start-worker';
+import { testDatabase } from '../support/database';
+import { refusal, startMailServer, type MailServer } from '../support/mail-server';
+import { startWorkerHere } from '../support/worker';
+
+const database = testDatabase();
+let server: MailServer;
+let workers: Worker[] = [];
+
+beforeEach(async () => {
+  server = await startMailServer();
+  workers = [];
+});
+afterEach(async () => {
+  for (const worker of workers) await worker.stop();
+  await server.stop();
+});
+
+const startWorkers = async (count: number) => {
+  for (let index = 0; index < count; index += 1) {
+    workers.push(
+      await startWorkerHere(database.url, { SMTP_URL: server.url, MAIL_FROM: 'Dock <a@dock.example>' }),
+    );
+  }
+};
+const queue = () =>
+  queueMail(
+    { db: database.db, now: new Date() },
+    { kind: 'digest', to: 'm@wakewright.example', subject: 'Überfällig', text: 'Plain', html: '<p>Rich</p>' },
+  );
+const letter = (id: string) =>
+  database.db
+    .selectFrom('mail')
+    .select(['sent_at', 'failure'])
+    .where('id', '=', id)
+    .executeTakeFirstOrThrow();
+const isSent = async (id: string) => (await letter(id)).sent_at !== null;
+/** Brings the next attempt of a job that is waiting for one forward to now. */
+const hurry = () =>
+  sql`select graphile_worker.reschedule_jobs(array(select id from graphile_worker.jobs where locked_at is null), now())`.execute(
+    database.db,
+  );
+
+test('a letter arrives once, with text, HTML and a Message-ID made from its row', async () => {
+  await startWorkers(2);
+  const id = await queue();
+  await expect.poll(() => isSent(id), { timeout: 10_000 }).toBe(true);
+  const mail = await simpleParser(server.taken[0] ?? '');
+  expect(mail).toMatchObject({
+    subject: 'Überfällig',
+    text: expect.stringContaining('Plain') as string,
+    html: '<p>Rich</p>',
+    messageId: `<${id}@dock.example>`,
+  });
+  expect(server.taken).toHaveLength(1);
+});
+
+test('a letter that is sent is not sent again when its job runs twice', async () => {
+  await startWorkers(1);
+  const id = await queue();
+  await expect.poll(() => isSent(id), { timeout: 10_000 }).toBe(true);
+  const sentAt = await letter(id);
+  await sql`select graphile_worker.add_job('send-mail', json_build_object('mailId', ${id}::text))`.execute(
+    database.db,
+  );
+  await expect
+    .poll(() => sql`select 1 from graphile_worker.jobs`.execute(database.db).then(({ rows }) => rows), {
+      timeout: 10_000,
+    })
+    .toEqual([]);
+  expect(server.taken).toHaveLength(1);
+  expect(await letter(id)).toEqual(sentAt);
+});
+
+test('a server that has no room now gets the letter later; it arrives once', async () => {
+  let refusals = 0;
+  server.behave({
+    recipient: (go) => ((refusals += 1) <= 2 ? go(refusal(452, 'no room')) : go()),
+  });
+  await startWorkers(1);
+  const id = await queue();
+  await expect
+    .poll(
+      async () => {
+        await hurry();
+        return isSent(id);
+      },
+      { timeout: 20_000 },
+    )
+    .toBe(true);
+  expect({ refusals, taken: server.taken.length, ...(await letter(id)) }).toMatchObject({
+    refusals: 3,
+    taken: 1,
+    failure: null,
+  });
+});
+
+test('a server that will never take the letter is not asked again, and what it said is kept', async () => {
+  server.behave({ recipient: (go) => go(refusal(550, 'no such mailbox')) });
+  await startWorkers(1);
+  const id = await queue();
+  await expect
+    .poll(async () => (await letter(id)).failure ?? '', { timeout: 10_000 })
+    .toContain('no such mailbox');
+  await expect
+    .poll(() => sql`select 1 from graphile_worker.jobs`.execute(database.db).then(({ rows }) => rows), {
+      timeout: 10_000,
+    })
+    .toEqual([]);
+  expect(await isSent(id)).toBe(false);
+});
