@@ -40,12 +40,14 @@ export function keepHeartbeat({ ctx, workerId, limits, onGone }: Options): { sto
   }
 
   let running = turn();
-  return {
-    stop: async () => {
-      stopped = true;
-      clearTimeout(timer);
-      await running;
-      await endWorker(ctx(), { workerId });
-    },
-  };
+  async function end(): Promise<void> {
+    stopped = true;
+    clearTimeout(timer);
+    await running;
+    await endWorker(ctx(), { workerId }).catch((error: Error) =>
+      console.warn(`ended without saying so: ${error.message}`),
+    );
+  }
+  let ending: Promise<void> | undefined;
+  return { stop: () => (ending ??= end()) };
 }

@@ -1,5 +1,5 @@
 import { EventEmitter } from 'node:events';
-import { run, type Runner, type WorkerEvents } from 'graphile-worker';
+import { run, type WorkerEvents } from 'graphile-worker';
 import { createDatabase, createPool } from '@/db/client';
 import type { Context } from '@/lib/context';
 import { workerLimits } from './limits';
@@ -50,18 +50,25 @@ export async function startWorker(env: Env, onGone: (why: string) => void): Prom
   });
   const heartbeat = keepHeartbeat({ ctx, workerId, limits, onGone });
   const ended = runner.promise.finally(async () => {
-    await heartbeat.stop().catch((error: Error) => console.warn(`ended without saying so: ${error.message}`));
+    await heartbeat.stop();
     await Promise.all([pool.end(), db.destroy()]);
   });
-  return { workerId, ended, stop: () => stopWithin(runner, ended) };
+  const stop = async () => {
+    void runner.stop().catch(() => undefined);
+    const inTime = await settlesWithin(ended, GRACE_MS);
+    // Whatever still runs is given back, and ends with the process.
+    if (!inTime) await heartbeat.stop();
+  };
+  return { workerId, ended, stop };
 }
 
-async function stopWithin(runner: Runner, ended: Promise<void>): Promise<void> {
-  const late = setTimeout(
-    () => void runner.kill('jobs took too long to finish').catch(() => undefined),
-    GRACE_MS,
+/** True when the promise settles within `ms`, either way. */
+async function settlesWithin(promise: Promise<unknown>, ms: number): Promise<boolean> {
+  let timer: NodeJS.Timeout | undefined;
+  const late = new Promise<boolean>((resolve) => (timer = setTimeout(resolve, ms, false)));
+  const settled = promise.then(
+    () => true,
+    () => true,
   );
-  await runner.stop().catch(() => undefined);
-  await ended.catch(() => undefined);
-  clearTimeout(late);
+  return Promise.race([settled, late]).finally(() => clearTimeout(timer));
 }

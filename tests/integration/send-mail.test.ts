@@ -2,6 +2,9 @@ import { afterEach, beforeEach, expect, test } from 'vitest';
 import { simpleParser } from 'mailparser';
 import { sql } from 'kysely';
 import { queueMail } from '@/lib/actions/queue-mail';
+import { sendMail } from '@/lib/actions/send-mail';
+import { SYSTEM } from '@/lib/domain/access';
+import { createDeliver } from '@/lib/mail/deliver';
 import type { Worker } from '@/jobs/start-worker';
 import { testDatabase } from '../support/database';
 import { refusal, startMailServer, type MailServer } from '../support/mail-server';
@@ -112,4 +115,39 @@ test('a server that will never take the letter is not asked again, and what it s
     })
     .toEqual([]);
   expect(await isSent(id)).toBe(false);
+});
+
+test('a sender whose claim ran out before the server was ready for the letter sends nothing', async () => {
+  let letGo: () => void = () => undefined;
+  const arrived = new Promise<void>((arrive) => {
+    server.behave({
+      recipient: (go) => {
+        server.behave({});
+        letGo = () => go();
+        arrive();
+      },
+    });
+  });
+  const mailId = await queue();
+  const send = (claimMs: number) => {
+    const deliver = createDeliver({ smtpUrl: server.url, from: 'a@dock.example' });
+    const ctx = { db: database.db, actor: SYSTEM, now: new Date() };
+    return sendMail(ctx, { mailId }, { deliver, claimMs, renewMs: 60_000 });
+  };
+  const slow = send(500);
+  await arrived;
+  await expect(send(500)).rejects.toThrow('in the hands of another run');
+  await expect
+    .poll(
+      () =>
+        send(500).then(
+          () => isSent(mailId),
+          () => false,
+        ),
+      { timeout: 10_000 },
+    )
+    .toBe(true);
+  letGo();
+  await expect(slow).rejects.toThrow('the claim on the letter was lost');
+  expect(server.taken).toHaveLength(1);
 });
