@@ -1,0 +1,21 @@
+import { cookies } from 'next/headers';
+import type { ReactNode } from 'react';
+import { destinationsFor } from '@/components/shell/destinations';
+import { StaffFrame } from '@/components/shell/StaffFrame';
+import { requirePerson } from '@/lib/auth/page';
+import { parseTheme, themeCookie } from '@/lib/client/theme';
+
+/** The frame of every signed-in screen. A page asks for its own context: a layout keeps nobody out. */
+export default async function StaffLayout({ children }: { children: ReactNode }) {
+  const person = await requirePerson();
+  return (
+    <StaffFrame
+      destinations={destinationsFor(person)}
+      person={{ name: person.name, role: person.role }}
+      theme={parseTheme((await cookies()).get(themeCookie)?.value)}
+      lag={null}
+    >
+      {children}
+    </StaffFrame>
+  );
+}
