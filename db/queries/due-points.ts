@@ -1,6 +1,7 @@
-import { sql, type Kysely, type Selectable, type Transaction } from 'kysely';
+import { sql, type Kysely, type Transaction } from 'kysely';
 import type { DuePoint } from '@/lib/domain/due';
-import type { DB, DuePointTable } from '../tables';
+import { toDuePoint } from '@/lib/domain/duty-standing';
+import type { DB } from '../tables';
 
 /** A due point to be stored: of a unit, under a rule, by the index of the rule's trigger. */
 export type DuePointToStore = { unitId: string; ruleId: string; triggerIndex: number; point: DuePoint };
@@ -164,29 +165,6 @@ export async function listDuePoints(db: Kysely<DB>, unitId: string): Promise<Sto
     triggerIndex: row.trigger_index,
     point: toDuePoint(row),
   }));
-}
-
-function toDuePoint(row: Selectable<DuePointTable>): DuePoint {
-  if (row.due_tenths !== null)
-    return {
-      on: 'engine_hours',
-      dueTenths: row.due_tenths,
-      upcomingFromTenths: row.upcoming_from_tenths!,
-      overdueFromTenths: row.overdue_from_tenths!,
-    };
-  if (row.due_outings !== null)
-    return {
-      on: 'outings',
-      dueOutings: row.due_outings,
-      upcomingFromOutings: row.upcoming_from_outings!,
-      overdueFromOutings: row.overdue_from_outings!,
-    };
-  return {
-    on: 'calendar',
-    dueOn: row.due_on!,
-    upcomingFromOn: row.upcoming_from_on!,
-    overdueFromOn: row.overdue_from_on!,
-  };
 }
 
 /** Whether a unit's due points are those of its facts as they are now. */

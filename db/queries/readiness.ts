@@ -1,20 +1,11 @@
 import { sql, type Kysely } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
+import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { HoldReason } from '@/lib/domain/readiness';
 import type { DB } from '../tables';
 
 /** The columns of a stored due point that its words need; those of the other measures are null. */
-export type StoredPoint = {
-  due_tenths: number | null;
-  upcoming_from_tenths: number | null;
-  overdue_from_tenths: number | null;
-  due_outings: number | null;
-  upcoming_from_outings: number | null;
-  overdue_from_outings: number | null;
-  due_on: CalendarDay | null;
-  upcoming_from_on: CalendarDay | null;
-  overdue_from_on: CalendarDay | null;
-};
+export type StoredPoint = DuePointColumns;
 
 /** One hold of a unit. `since` is an instant as ISO text, `point` the due point of an overdue rule. */
 export type StoredHold = {

@@ -3,7 +3,7 @@ import type { CalendarDay } from '@/lib/domain/calendar-day';
 import { localDay } from '@/lib/domain/calendar-day';
 import { describeHold, describeLift, findNearestRule, type Hold } from '@/lib/domain/readiness';
 import type { HoldShown, ReadyUnit } from '@/lib/schemas/availability';
-import { toDuePoint } from './shape-due-point';
+import { toDuePoint } from '@/lib/domain/duty-standing';
 
 /** When and for how long somebody means to go out; `onDay` null is today at the unit's dock. */
 export type Asked = { at: Date; onDay: CalendarDay | null; plannedTenths: number | null };
