@@ -1,0 +1,29 @@
+import { findHeldSince, listClosures } from '@/db/queries/closures';
+import { getTaskStanding, listTaskNotes } from '@/db/queries/tasks';
+import type { Context } from '@/lib/context';
+import type { TaskPage } from '@/lib/schemas/task';
+import { accessTask } from './access';
+import { toClosure } from './shape-closure';
+import { toTask, toTaskNote } from './shape-task';
+
+/** A task with its unit's meter, its notes and what was done under its rule. Throws `not_found`, `forbidden`. */
+export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
+  await accessTask(ctx, id, 'task.read');
+  const row = await getTaskStanding(ctx.db, id);
+  const task = toTask(row, ctx.now);
+  const [notes, closures, heldSince] = await Promise.all([
+    listTaskNotes(ctx.db, id),
+    listClosures(ctx.db, row),
+    task.holdsUnit ? findHeldSince(ctx.db, row, ctx.now) : null,
+  ]);
+  return {
+    ...task,
+    modelName: row.model_name,
+    engineHours: row.meter_tenths / 10,
+    outings: row.meter_outings,
+    readAt: row.meter_read_at.toISOString(),
+    heldSince: heldSince?.toISOString() ?? null,
+    notes: notes.map(toTaskNote),
+    closures: closures.map(toClosure),
+  };
+}
