@@ -75,3 +75,12 @@ export async function withdrawDefectTask(
     .where('started_at', 'is', null)
     .execute();
 }
+
+/** Opens a defect again, whose clearing was a mistake. */
+export async function reopenDefect(db: Kysely<DB>, id: string): Promise<void> {
+  await db
+    .updateTable('defect')
+    .set({ cleared_at: null, cleared_by: null, clear_note: null })
+    .where('id', '=', id)
+    .execute();
+}

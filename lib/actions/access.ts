@@ -1,3 +1,4 @@
+import { findClosure, type ClosureRow } from '@/db/queries/closures';
 import { findDefect, type DefectRow } from '@/db/queries/defects';
 import { findLayUp, type LayUpRow } from '@/db/queries/lay-ups';
 import { findMeterFacts, type MeterFactsAsked } from '@/db/queries/meter-facts';
@@ -129,6 +130,11 @@ export async function accessPerson(
   const row = await findPerson(ctx.db, personId);
   if (!row) throw refuseField(path, 'is nobody here', 'not_found');
   return row as Checked<PersonRow>;
+}
+
+/** The closure, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
+export async function accessClosure(ctx: Context, id: string, act: DockAct): Promise<Checked<ClosureRow>> {
+  return checkRow(ctx, await findClosure(ctx.db, id), act, ['id', 'closure']);
 }
 
 function forbidden(): Refusal {
