@@ -15,12 +15,16 @@ export interface Api {
   send<T = unknown>(method: string, path: string, init: RequestInit): Promise<Answer<T>>;
 }
 
-/** A caller of the API as a browser on our own pages, with the Cookie header that signIn() answered, or nobody's. */
-export function api(baseUrl: string, cookie = ''): Api {
+/** How a caller says who it is: with the Cookie header that signIn() answered, or with an API key. */
+export type Caller = string | { key: string };
+
+/** A caller of the API, or nobody. With a cookie it calls as a browser on our own pages does. */
+export function api(baseUrl: string, caller: Caller = ''): Api {
   async function send<T>(method: string, path: string, init: RequestInit = {}): Promise<Answer<T>> {
     const headers = new Headers(init.headers);
-    headers.set('cookie', cookie);
-    if (!headers.has('origin')) headers.set('origin', baseUrl);
+    if (typeof caller !== 'string') headers.set('authorization', `Bearer ${caller.key}`);
+    else if (caller) headers.set('cookie', caller);
+    if (typeof caller === 'string' && !headers.has('origin')) headers.set('origin', baseUrl);
     const response = await fetch(`${baseUrl}/api/v1${path}`, {
       redirect: 'manual',
       ...init,
