@@ -1,4 +1,5 @@
 import type { UnitState } from '@/components/state/state-words';
+import { USUAL_PACE } from '@/lib/domain/readiness';
 
 /** One unit as the water line draws it. */
 export type WaterlineUnit = {
@@ -41,7 +42,7 @@ export function governingLimit(unit: WaterlineUnit): Governing | null {
   const { tenthsToHold: tenths, daysToHold: days, hoursPerDayTenths: rate } = unit;
   if (tenths === null) return days === null ? null : { by: 'days', amount: days };
   if (days === null) return { by: 'hours', amount: tenths };
-  const tenthsADay = rate !== undefined && rate > 0 ? rate : largest.tenths / largest.days;
+  const tenthsADay = rate !== undefined && rate > 0 ? rate : USUAL_PACE.tenthsPerDay;
   return tenths / tenthsADay <= days ? { by: 'hours', amount: tenths } : { by: 'days', amount: days };
 }
 

@@ -78,51 +78,8 @@ export function describeLift(hold: Pick<Hold, 'reason'> & { ruleName?: string | 
 export type HoldingPoint = { ruleId: string; point: DuePoint };
 /** What a unit runs in a day, for setting hours and outings against days. */
 export type Pace = { tenthsPerDay: number; outingsPerDay: number };
-/** Taken where nothing is known of a unit's use: 3.0 h and 3 outings a day. */
-export const USUAL_PACE: Pace = { tenthsPerDay: 30, outingsPerDay: 3 };
-
-/**
- * What is left before the next hold by each measure, null where nothing counts by it; 0 or less when the unit
- * is held by it now. `ruleId` is the rule that holds first, hours and outings turned into days at a pace.
- */
-export type Room = {
-  tenthsToHold: number | null;
-  outingsToHold: number | null;
-  daysToHold: number | null;
-  ruleId: string | null;
-};
-
-function measureRoom(point: DuePoint, standing: Standing): { key: keyof Omit<Room, 'ruleId'>; left: number } {
-  switch (point.on) {
-    case 'engine_hours':
-      return { key: 'tenthsToHold', left: point.overdueFromTenths - standing.engineHoursTenths };
-    case 'outings':
-      return { key: 'outingsToHold', left: point.overdueFromOutings - standing.outings };
-    case 'calendar':
-      return { key: 'daysToHold', left: daysBetween(standing.today, point.overdueFromOn) };
-  }
-}
-
-/** How far a unit is from its next hold, over the due points of the rules that hold it. */
-export function computeRoom(
-  points: readonly HoldingPoint[],
-  standing: Standing,
-  pace: Pace = USUAL_PACE,
-): Room {
-  const perDay = { tenthsToHold: pace.tenthsPerDay, outingsToHold: pace.outingsPerDay, daysToHold: 1 };
-  const room: Room = { tenthsToHold: null, outingsToHold: null, daysToHold: null, ruleId: null };
-  let nearest = Infinity;
-  for (const { ruleId, point } of points) {
-    const { key, left } = measureRoom(point, standing);
-    room[key] = Math.min(room[key] ?? Infinity, left);
-    const days = left / Math.max(perDay[key], 0.01);
-    if (days < nearest) {
-      nearest = days;
-      room.ruleId = ruleId;
-    }
-  }
-  return room;
-}
+/** Taken where nothing is known of a unit's use: five hours, or five outings, in three days. */
+export const USUAL_PACE: Pace = { tenthsPerDay: 50 / 3, outingsPerDay: 5 / 3 };
 
 /** What is left by each measure, with the rule that holds first by it. */
 export type RoomByMeasure = {
@@ -134,7 +91,7 @@ export type RoomByMeasure = {
   daysRuleId: string | null;
 };
 
-/** The rule that holds first, as `computeRoom` chooses it: hours and outings turned into days at a pace. */
+/** The rule that holds first, hours and outings turned into days at a pace. */
 export function findNearestRule(room: RoomByMeasure, pace: Pace = USUAL_PACE): string | null {
   const inDays = (left: number | null, perDay: number) =>
     left === null ? Infinity : left / Math.max(perDay, 0.01);
@@ -144,4 +101,53 @@ export function findNearestRule(room: RoomByMeasure, pace: Pace = USUAL_PACE): s
     { days: inDays(room.days, 1), ruleId: room.daysRuleId },
   ];
   return choices.reduce((nearest, choice) => (choice.days < nearest.days ? choice : nearest)).ruleId;
+}
+
+/**
+ * What is left before the next hold by each measure, null where nothing counts by it; 0 or less when the unit
+ * is held by it now. `ruleId` is the rule that holds first.
+ */
+export type Room = {
+  tenthsToHold: number | null;
+  outingsToHold: number | null;
+  daysToHold: number | null;
+  ruleId: string | null;
+};
+
+type Left = { on: DuePoint['on']; left: number; ruleId: string };
+
+function measureLeft({ ruleId, point }: HoldingPoint, standing: Standing): Left {
+  switch (point.on) {
+    case 'engine_hours':
+      return { on: point.on, left: point.overdueFromTenths - standing.engineHoursTenths, ruleId };
+    case 'outings':
+      return { on: point.on, left: point.overdueFromOutings - standing.outings, ruleId };
+    case 'calendar':
+      return { on: point.on, left: daysBetween(standing.today, point.overdueFromOn), ruleId };
+  }
+}
+
+/** How far a unit is from its next hold, over the due points of the rules that hold it. */
+export function computeRoom(
+  points: readonly HoldingPoint[],
+  standing: Standing,
+  pace: Pace = USUAL_PACE,
+): Room {
+  const all = points.map((point) => measureLeft(point, standing)).sort((a, b) => a.left - b.left);
+  const least = (on: DuePoint['on']) => all.find((one) => one.on === on);
+  const [hours, outings, days] = [least('engine_hours'), least('outings'), least('calendar')];
+  const room: RoomByMeasure = {
+    tenths: hours?.left ?? null,
+    hoursRuleId: hours?.ruleId ?? null,
+    outings: outings?.left ?? null,
+    outingsRuleId: outings?.ruleId ?? null,
+    days: days?.left ?? null,
+    daysRuleId: days?.ruleId ?? null,
+  };
+  return {
+    tenthsToHold: room.tenths,
+    outingsToHold: room.outings,
+    daysToHold: room.days,
+    ruleId: findNearestRule(room, pace),
+  };
 }

@@ -62,7 +62,7 @@ describe('a hold in words', () => {
   });
 });
 
-// Worked by hand; the usual pace is 3.0 h and 3 outings a day.
+// Worked by hand; the usual pace is five hours, or five outings, in three days.
 describe('room before the next hold', () => {
   it('is none by any measure for a unit that no rule holds', () => {
     expect(computeRoom([], standing)).toEqual({
@@ -80,7 +80,7 @@ describe('room before the next hold', () => {
       { ruleId: 'yearly', point: dayPoint('2026-07-04', '2026-07-06') },
       { ruleId: 'forty outings', point: outingsPoint(80) },
     ];
-    // 8.8 h are 2.9 days, 39 outings are 13 days, and the yearly check holds in 2 days.
+    // 8.8 h are 5.3 days, 39 outings are 23 days, and the yearly check holds in 2 days.
     expect(computeRoom(points, standing)).toEqual({
       tenthsToHold: 88,
       outingsToHold: 39,
