@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { count, day, hours, id, line } from './common';
+import type { UnitDuePoints } from './due-point';
 
 /** "Last done at …": for a unit that comes with a past. `note` says who says so. */
 export const recordBaseline = z.strictObject({
@@ -29,3 +30,12 @@ export const baseline = z.object({
 
 export type RecordBaseline = z.output<typeof recordBaseline>;
 export type Baseline = z.output<typeof baseline>;
+
+/** What the screen of a unit's baselines is drawn from. */
+export type UnitBaselines = {
+  unit: { id: string; fleetNumber: string; dockName: string };
+  standing: UnitDuePoints;
+  baselines: Baseline[];
+  mayRecord: boolean;
+  mayWithdraw: boolean;
+};

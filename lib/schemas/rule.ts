@@ -88,6 +88,9 @@ const fields = {
   procedureId: id.nullable().optional(),
 };
 
+/** The part of a rule that says when it is due. */
+export const ruleSchedule = z.strictObject(schedule).superRefine(checkEarly);
+
 export const createRule = z.strictObject(fields).superRefine(checkEarly);
 
 /** As `createRule`: the whole rule. `revision` is the one that was edited; without it no conflict is looked for. */

@@ -1,0 +1,104 @@
+import { Button } from '@/components/ui/Button';
+import { Checkbox } from '@/components/ui/Checkbox';
+import { Notice } from '@/components/ui/Notice';
+import { RadioGroup } from '@/components/ui/RadioGroup';
+import { TextInput } from '@/components/ui/TextInput';
+import type { RuleFormData } from '@/lib/schemas/rule-form';
+import { KIND_WORDS } from './due-words';
+import { LabourFields } from './LabourFields';
+import { labourOf, type RuleDraft } from './rule-draft';
+import { ScopeFields } from './ScopeFields';
+import { Section } from './Section';
+import { TriggerEditor } from './TriggerEditor';
+import type { useRuleForm } from './use-rule-form';
+import { WindowFields } from './WindowFields';
+
+const KINDS = (['inspection', 'service', 'rebuild'] as const).map((value) => ({
+  value,
+  label: KIND_WORDS[value],
+}));
+const MOST_TRIGGERS = 8;
+
+/** The questions a rule answers, in the order one thinks of them. */
+export function RuleFields({
+  data,
+  state,
+  covered,
+}: {
+  data: RuleFormData;
+  state: ReturnType<typeof useRuleForm>;
+  covered: number;
+}) {
+  const { form } = state;
+  const { draft, change, errorOf, readOnly } = form;
+  return (
+    <>
+      <Notice tone="warn" still>
+        The engine maker’s manual comes first. Where it asks for the work sooner than this rule, follow the
+        manual and change the rule.
+      </Notice>
+      <Section title="What is done">
+        <TextInput
+          label="Name"
+          id="name"
+          maxLength={80}
+          value={draft.name}
+          readOnly={readOnly}
+          error={errorOf('name')}
+          onChange={(event) => change('name', { name: event.target.value })}
+        />
+        <RadioGroup
+          label="Kind"
+          name="kind"
+          id="kind"
+          look="segmented"
+          options={KINDS}
+          value={draft.kind}
+          disabled={readOnly}
+          onChange={(event) => change('kind', { kind: event.target.value as RuleDraft['kind'] })}
+        />
+      </Section>
+      <Section
+        title="How often"
+        hint="With more than one, whichever comes first is due, and doing it once answers all."
+      >
+        {draft.triggers.map((trigger, index) => (
+          <TriggerEditor
+            key={trigger.key}
+            form={form}
+            trigger={trigger}
+            index={index}
+            onRemove={draft.triggers.length > 1 ? () => state.removeTrigger(index) : undefined}
+          />
+        ))}
+        {readOnly || draft.triggers.length >= MOST_TRIGGERS ? null : (
+          <div>
+            <Button onClick={state.addTrigger}>Add another trigger</Button>
+          </div>
+        )}
+      </Section>
+      <Section title="How early and how late">
+        <WindowFields form={form} />
+        <Checkbox
+          label="Late work holds the unit: it may not be hired out until the work is done"
+          id="holdsUnit"
+          checked={draft.holdsUnit}
+          disabled={readOnly}
+          onChange={(event) => change('holdsUnit', { holdsUnit: event.target.checked })}
+        />
+      </Section>
+      <Section title="For which units" hint="A unit is covered when everything chosen here fits it.">
+        <ScopeFields
+          form={form}
+          models={data.models}
+          docks={data.docks}
+          covered={covered}
+          fleet={data.fleet.length}
+        />
+      </Section>
+      <Section title="How long the work takes">
+        <LabourFields form={form} labour={labourOf(draft)} />
+      </Section>
+    </>
+  );
+}
