@@ -4,53 +4,31 @@ import { useState } from 'react';
 import { send, type Failure } from '@/lib/client/api';
 import type { Rule } from '@/lib/schemas/rule';
 import type { FormState } from './form-state';
-import { checkDraft, draftOf, newDraft, newTrigger, type RuleDraft } from './rule-draft';
-
-const SCHEDULE = /^(triggers|lead|window)\b/;
+import { checkDraft, draftOf, newDraft, type CheckedDraft } from './rule-draft';
+import { useRuleDraft } from './use-rule-draft';
 
 /** The rule form's state: what is typed, what is wrong with it, and saving it. */
 export function useRuleForm(rule: Rule | null, today: string, readOnly: boolean) {
-  const [begun] = useState(() => (rule ? draftOf(rule, today) : newDraft(today)));
-  const [draft, setDraft] = useState<RuleDraft>(begun);
-  const [touched, setTouched] = useState<ReadonlySet<string>>(new Set());
   const [failure, setFailure] = useState<Failure | null>(null);
   const [busy, setBusy] = useState(false);
   const [tried, setTried] = useState(false);
   const [saved, setSaved] = useState(false);
-  const checked = checkDraft(draft);
-
-  const update = (path: string, change: (before: RuleDraft) => RuleDraft) => {
-    setDraft(change);
-    setTouched((before) => new Set(before).add(path));
-    setFailure(null);
-  };
+  const typed = useRuleDraft(
+    () => (rule ? draftOf(rule, today) : newDraft(today)),
+    today,
+    () => setFailure(null),
+  );
+  const checked = checkDraft(typed.draft);
   const refused = Object.fromEntries((failure?.errors ?? []).map(({ path, message }) => [path, message]));
   const form: FormState = {
-    draft,
+    draft: typed.draft,
     readOnly,
-    change: (path, part) => update(path, (before) => ({ ...before, ...part })),
-    changeTrigger: (path, index, part) =>
-      update(path, (before) => ({
-        ...before,
-        triggers: before.triggers.map((trigger, at) => (at === index ? { ...trigger, ...part } : trigger)),
-      })),
+    change: typed.change,
+    changeTrigger: typed.changeTrigger,
     // A window that is too wide shows while the trigger is typed as well, since both make it so.
     errorOf: (path) =>
       refused[path] ??
-      (tried || touched.has(path) || path.startsWith('window.') ? checked.errors[path] : undefined),
-  };
-  const addTrigger = () =>
-    update('triggers', (before) => {
-      const key = 1 + Math.max(...before.triggers.map((trigger) => trigger.key));
-      return { ...before, triggers: [...before.triggers, newTrigger(key, 'calendar', today)] };
-    });
-  const removeTrigger = (index: number) => {
-    update('triggers', (before) => ({
-      ...before,
-      triggers: before.triggers.filter((_, at) => at !== index),
-    }));
-    // Those after it move up; what was said of a place is not true of it any more.
-    setTouched((before) => new Set([...before].filter((path) => !SCHEDULE.test(path))));
+      (tried || typed.touched.has(path) || path.startsWith('window.') ? checked.errors[path] : undefined),
   };
   /** Saves; answers the rule as it is stored, or null when something is wrong. */
   const save = async (): Promise<Rule | null> => {
@@ -70,13 +48,21 @@ export function useRuleForm(rule: Rule | null, today: string, readOnly: boolean)
     setSaved(answer.ok);
     return answer.ok ? answer.data : null;
   };
-  const listed = failure
-    ? failure.errors.length > 0
-      ? [...failure.errors]
-      : [{ path: '', message: failure.detail }]
-    : tried
-      ? Object.entries(checked.errors).map(([path, message]) => ({ path, message }))
-      : [];
-  const unsaved = !saved && !readOnly && JSON.stringify(draft) !== JSON.stringify(begun);
-  return { form, checked, busy, unsaved, listed, addTrigger, removeTrigger, save };
+  return {
+    form,
+    checked,
+    busy,
+    unsaved: typed.changed && !saved && !readOnly,
+    listed: listErrors(failure, tried ? checked : null),
+    addTrigger: typed.addTrigger,
+    removeTrigger: typed.removeTrigger,
+    save,
+  };
+}
+
+/** What stands above the form: why the server refused, else what is wrong with what is typed. */
+function listErrors(failure: Failure | null, checked: CheckedDraft | null) {
+  if (failure)
+    return failure.errors.length > 0 ? [...failure.errors] : [{ path: '', message: failure.detail }];
+  return Object.entries(checked?.errors ?? {}).map(([path, message]) => ({ path, message }));
 }

@@ -5,11 +5,12 @@ import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { openRuleForm } from '@/lib/actions/open-rule-form';
 import { pageContext } from '@/lib/auth/page';
+import { orNotFound, pageId } from '@/lib/auth/page-row';
 
 export const metadata: Metadata = { title: 'Rule' };
 
 export default async function RulePage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await openRuleForm(await pageContext(), (await params).id);
+  const data = await orNotFound(openRuleForm(await pageContext(), await pageId(params)));
   const { rule, mayWrite } = data;
   if (!rule) return null;
   return (

@@ -7,11 +7,12 @@ import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { openBaselines } from '@/lib/actions/open-baselines';
 import { pageContext } from '@/lib/auth/page';
+import { orNotFound, pageId } from '@/lib/auth/page-row';
 
 export const metadata: Metadata = { title: 'Baselines' };
 
 export default async function BaselinesPage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await openBaselines(await pageContext(), (await params).id);
+  const data = await orNotFound(openBaselines(await pageContext(), await pageId(params)));
   const { unit, standing, baselines, mayRecord, mayWithdraw } = data;
   return (
     <>
