@@ -80,7 +80,9 @@ const schema = z.object({
   DB_POOL_MAX: count(200).default(10),
   WORKER_CONCURRENCY: count(50).default(4),
   WORKER_BEAT_MS: count(5_000, 200).default(5_000),
-  LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info'),
+  LOG_LEVEL: z
+    .enum(['debug', 'info', 'warn', 'error'], { error: 'must be debug, info, warn or error' })
+    .default('info'),
 });
 
 /** What a person may set before `npm start`: the launcher fills in the rest. */

@@ -32,10 +32,15 @@ export async function isEmpty(url: string): Promise<boolean> {
   }
 }
 
-/** Applies what is missing of the migrations. */
+/** Applies what is missing of the migrations. Throws, naming the server, when it cannot be reached. */
 export async function migrate(url: string): Promise<void> {
   await step('Bringing the database up to date', async () => {
-    const applied = await migrateToLatest(url);
+    const applied = await migrateToLatest(url).catch((error: unknown) => {
+      const { host, pathname } = new URL(url);
+      throw new Error(`the database ${pathname.slice(1)} on ${host} could not be brought up to date`, {
+        cause: error,
+      });
+    });
     if (applied.length > 0) console.log(`  applied: ${applied.join(', ')}`);
   });
 }

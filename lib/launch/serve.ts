@@ -82,6 +82,10 @@ async function launch(mode: Mode, settings: LaunchSettings, cleanup: Cleanup): P
   throw new Error(await services.failed);
 }
 
+/** What went wrong and, below it, why. */
+const messages = (error: unknown): string[] =>
+  error instanceof Error ? [error.message, ...messages(error.cause)] : [];
+
 /** Runs Wakewright until Ctrl-C, which ends all of it and exits with 0; exits with 1 when a part of it fails. */
 export async function serve(mode: Mode): Promise<void> {
   const settings = settingsOrFail();
@@ -101,7 +105,6 @@ export async function serve(mode: Mode): Promise<void> {
     if (asked) return;
     asked = true;
     await cleanup.run();
-    const { message, cause } = error as Error;
-    fail(cause instanceof Error ? `${message}\n${cause.message}` : message);
+    fail(messages(error).join('\n'));
   }
 }
