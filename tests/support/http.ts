@@ -14,6 +14,7 @@ export type Answer<T = Record<string, unknown>> = { status: number; body: T };
 /** A person who calls `/api/v1`; paths begin after that. `body` that is a string is sent as it is. */
 export type Caller = {
   personId: string;
+  key: string;
   name: string;
   send: <T = Record<string, unknown>>(method: string, path: string, body?: unknown) => Promise<Answer<T>>;
 };
@@ -93,7 +94,7 @@ export function testApi(database: { url: string }): {
         const text = await response.text();
         return { status: response.status, body: text ? JSON.parse(text) : null };
       };
-      return { personId, name, send };
+      return { personId, key, name, send };
     },
   };
 }
