@@ -1,3 +1,4 @@
+import { createHash, randomBytes } from 'node:crypto';
 import type { Kysely } from 'kysely';
 import type { DB } from '@/db/tables';
 import { createDock } from '@/lib/actions/create-dock';
@@ -6,7 +7,7 @@ import { createRule } from '@/lib/actions/create-rule';
 import { createUnit } from '@/lib/actions/create-unit';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import type { Context } from '@/lib/context';
-import { SYSTEM } from '@/lib/domain/access';
+import { SYSTEM, type PersonActor, type Role } from '@/lib/domain/access';
 import { createRule as createRuleInput } from '@/lib/schemas/rule';
 
 /** What the system is asked to do at an instant. */
@@ -56,4 +57,36 @@ export async function openDock(
   });
   await refreshDue(ctx, { unitIds: [unit.id] });
   return { dock, model, unit, rule };
+}
+
+export type Member = { actor: PersonActor; key: string; as(now: Date): Context };
+
+/** A person of a role, at all docks unless some are named, with an API key to call with. */
+export async function addPerson(db: Kysely<DB>, role: Role, dockIds: string[] = []): Promise<Member> {
+  const key = randomBytes(24).toString('base64url');
+  const email = `${role}-${key.slice(0, 8).toLowerCase()}@example.test`;
+  const { id } = await db
+    .insertInto('person')
+    .values({ email, name: `A ${role}`, role, dock_ids: dockIds, password_hash: null, deactivated_by: null })
+    .returning('id')
+    .executeTakeFirstOrThrow();
+  await db
+    .insertInto('api_key')
+    .values({
+      person_id: id,
+      name: 'test',
+      prefix: key.slice(0, 6),
+      key_hash: createHash('sha256').update(key).digest(),
+    })
+    .execute();
+  const actor: PersonActor = {
+    kind: 'person',
+    personId: id,
+    sessionId: null,
+    name: `A ${role}`,
+    email,
+    role,
+    dockIds,
+  };
+  return { actor, key, as: (now) => ({ db, actor, now }) };
 }
