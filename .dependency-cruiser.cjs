@@ -67,7 +67,7 @@ const HOUSE = [
     to: [
       '^lib/(actions|domain|schemas|secrets)/',
       '^lib/(context|enqueue|errors|links)\\.ts$',
-      '^db/(queries/|tables\\.ts|transaction\\.ts)',
+      '^db/(queries/|tables\\.ts|transaction\\.ts|migrate\\.ts)',
       npm('kysely'),
     ],
   },
