@@ -51,6 +51,17 @@ export function listUnits(db: Kysely<DB>, dockIds: 'all' | readonly string[]): P
   return (dockIds === 'all' ? query : query.where('unit.dock_id', 'in', [...dockIds])).execute();
 }
 
+/** The ids of all units that are not retired, in order. */
+export async function listUnitIds(db: Kysely<DB>): Promise<string[]> {
+  const rows = await db
+    .selectFrom('unit')
+    .select('id')
+    .where('retired_at', 'is', null)
+    .orderBy('id')
+    .execute();
+  return rows.map((row) => row.id);
+}
+
 export function insertUnit(db: Kysely<DB>, row: Insertable<UnitTable>) {
   return db.insertInto('unit').values(row).returning('id').executeTakeFirstOrThrow();
 }

@@ -45,11 +45,6 @@ export async function freeJobsOfGoneWorkers(db: Kysely<DB>, goneAfterMs: number)
   return rows.map((row) => row.worker_id);
 }
 
-/** Takes away the records of workers that ended before `before`. */
-export async function deleteEndedWorkers(db: Kysely<DB>, before: Date): Promise<void> {
-  await db.deleteFrom('worker_heartbeat').where('stopped_at', '<', before).execute();
-}
-
 /**
  * How the queue stands: workers that live, and for how many seconds the job that waits longest could have run. A
  * job that a worker has which no longer lives counts as waiting; one that failed for good does not.
