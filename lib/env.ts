@@ -70,6 +70,7 @@ const schema = z.object({
   PUBLIC_URL: origin,
   AUTH_SECRET: secret,
   MAIL_FROM: mailbox.default('Wakewright <wakewright@localhost>'),
+  MAILBOX_URL: origin.optional(),
   SETUP_TOKEN: z.string().min(16, 'must be at least 16 characters long').optional(),
   TRUST_PROXY: z.coerce
     .number({ error: 'must be a number' })
@@ -151,6 +152,11 @@ export const VARIABLES: readonly Variable[] = [
     default: '`5000`',
   },
   { name: 'LOG_LEVEL', meaning: '`debug`, `info`, `warn` or `error`', default: '`info`' },
+  {
+    name: 'MAILBOX_URL',
+    meaning: 'page of a local mailbox, linked to after mail is sent',
+    default: 'that of the local mailbox, if it runs',
+  },
   { name: 'MAILBOX_PORT', meaning: 'port of the local mailbox’s page', default: '`8025`, or a free one' },
 ];
 

@@ -52,13 +52,18 @@ async function openMailbox(settings: LaunchSettings, cleanup: Cleanup) {
   return mailbox;
 }
 
-async function resolveEnv(settings: LaunchSettings, database: Database, smtpUrl: string): Promise<Env> {
+async function resolveEnv(
+  settings: LaunchSettings,
+  database: Database,
+  mail: { smtpUrl: string; webUrl?: string },
+): Promise<Env> {
   const port = await freePort(settings.PORT, settings.HOST);
   if (port !== settings.PORT) console.log(`• Port ${settings.PORT} is taken; using ${port}.`);
   return parseEnv({
     ...Object.fromEntries(Object.entries(settings).map(([name, value]) => [name, String(value)])),
     DATABASE_URL: database.url,
-    SMTP_URL: smtpUrl,
+    SMTP_URL: mail.smtpUrl,
+    MAILBOX_URL: settings.MAILBOX_URL ?? mail.webUrl,
     PORT: String(port),
     PUBLIC_URL: settings.PUBLIC_URL ?? `http://127.0.0.1:${port}`,
     AUTH_SECRET: settings.AUTH_SECRET ?? keptValue(root, 'secret', makeSecret),
@@ -74,7 +79,7 @@ async function launch(mode: Mode, settings: LaunchSettings, cleanup: Cleanup): P
     await ensureBuild(root, (build) => cleanup.add('build', () => build.stop()));
   }
   const mailbox = await openMailbox(settings, cleanup);
-  const env = await resolveEnv(settings, database, settings.SMTP_URL ?? mailbox?.smtpUrl ?? '');
+  const env = await resolveEnv(settings, database, mailbox ?? { smtpUrl: settings.SMTP_URL ?? '' });
   const services = runServices({ root, mode, env, note: (name, pid) => noteProcess(root, name, pid) });
   cleanup.add('web server and worker', () => services.stop());
   await step('Starting the web server and the worker', () => services.ready);

@@ -18,6 +18,11 @@ function workerSettings(databaseUrl: string): Record<string, string> {
   };
 }
 
+/** What actions that write links read of the environment in the test's own process. */
+export function setEnvironment(databaseUrl: string, settings: Record<string, string> = {}): void {
+  Object.assign(process.env, workerSettings(databaseUrl), settings);
+}
+
 /** A worker inside the test's own process, ended by `stop()`. */
 export function startWorkerHere(databaseUrl: string, settings: Record<string, string> = {}): Promise<Worker> {
   return startWorker(workerEnv(databaseUrl, settings), (why) => {
