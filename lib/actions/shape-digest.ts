@@ -2,7 +2,7 @@ import type { StoredClosed, StoredDuty, StoredHeldTime } from '@/db/queries/dige
 import type { ReadinessRow, StoredHold } from '@/db/queries/readiness';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DockFacts } from '@/lib/domain/digest';
-import { toDuePoint } from './shape-due-point';
+import { toDuePoint } from '@/lib/domain/duty-standing';
 
 type Stored = {
   duties: readonly StoredDuty[];
