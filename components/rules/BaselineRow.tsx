@@ -73,9 +73,11 @@ export function BaselineRow({
               onChange={(event) => onChange({ outings: event.target.value })}
             />
           </div>
-          <Button className="sm:mt-8" busy={busy} onClick={onSave} aria-label={`Save ${duty.ruleName}`}>
-            Save
-          </Button>
+          <div className="w-full sm:mt-8 sm:w-auto">
+            <Button busy={busy} onClick={onSave} aria-label={`Save ${duty.ruleName}`}>
+              Save
+            </Button>
+          </div>
         </div>
         {other ? (
           <p role="alert" className="font-semibold text-danger">

@@ -34,7 +34,7 @@ export function LabourFields({ form, labour }: { form: FormState; labour: Labour
           />
         ))}
       </div>
-      {labour ? (
+      {labour && Object.values(labour).some((minutes) => minutes > 0) ? (
         <p role="status" className="font-semibold">
           One engine without a carburettor takes {takes(0)}, a twin {takes(2)}, a triple {takes(3)}.
         </p>

@@ -77,7 +77,10 @@ export function RuleFields({
           </div>
         )}
       </Section>
-      <Section title="How early and how late">
+      <Section
+        title="How early and how late"
+        hint="Upcoming from so much before it is due. Done within what is early and late, it counts as on schedule."
+      >
         <WindowFields form={form} />
         <Checkbox
           label="Late work holds the unit: it may not be hired out until the work is done"

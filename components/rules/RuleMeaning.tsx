@@ -1,8 +1,9 @@
 import { StateMark } from '@/components/state/StateMark';
 import { Select } from '@/components/ui/Select';
+import { cx } from '@/components/ui/cx';
 import { Skeleton } from '@/components/ui/Skeleton';
 import { describeRule } from '@/lib/domain/rule-words';
-import type { RulePreview, ScheduleShape } from '@/lib/schemas/rule';
+import type { Due, RulePreview, ScheduleShape } from '@/lib/schemas/rule';
 import { toSchedule } from '@/lib/schemas/schedule-shape';
 import { dueText, hoursText, TRIGGER_WORDS } from './due-words';
 import type { Preview } from './use-preview';
@@ -90,18 +91,29 @@ function TriggerPreview({
       {trigger.due ? (
         <>
           <p className="flex flex-wrap items-center gap-x-3 gap-y-1">
-            <span className="numerals text-xl font-bold">{dueText(trigger.due)}</span>
+            <DueText due={trigger.due} className="text-xl font-bold" />
             <StateMark state={trigger.state} />
           </p>
           {trigger.following.length > 0 ? (
-            <p>
-              then <span className="numerals">{trigger.following.map(dueText).join(' · ')}</span>
-            </p>
+            <ul className="flex flex-wrap gap-x-3" aria-label="Then, each done when due">
+              <li aria-hidden="true">then</li>
+              {trigger.following.map((due) => (
+                <li key={dueText(due)}>
+                  <DueText due={due} />
+                </li>
+              ))}
+            </ul>
           ) : null}
         </>
       ) : (
         <p>Used up: it is not due again.</p>
       )}
     </div>
+  );
+}
+
+function DueText({ due, className }: { due: Due; className?: string }) {
+  return (
+    <span className={cx('whitespace-nowrap', !('date' in due) && 'numerals', className)}>{dueText(due)}</span>
   );
 }

@@ -11,7 +11,7 @@ const COLUMNS: TableColumn[] = [
   { id: 'kind', header: 'Kind', sortable: true },
   { id: 'words', header: 'What it means' },
   { id: 'units', header: 'Units', align: 'end', sortable: true },
-  { id: 'standing', header: 'How they stand', sortable: true },
+  { id: 'standing', header: 'Standing', sortable: true },
 ];
 const SHOWN = ['overdue', 'due', 'upcoming'] as const;
 

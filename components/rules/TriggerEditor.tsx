@@ -1,6 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { NumberInput } from '@/components/ui/NumberInput';
 import { RadioGroup } from '@/components/ui/RadioGroup';
+import { Select } from '@/components/ui/Select';
 import type { FormState } from './form-state';
 import { CalendarFields } from './CalendarFields';
 import { TRIGGER_WORDS } from './due-words';
@@ -27,13 +28,11 @@ export function TriggerEditor({
   const put = (field: string, part: Partial<TriggerDraft>) =>
     form.changeTrigger(`${path}.${field}`, index, part);
   return (
-    <fieldset className="grid min-w-0 gap-4 rounded border-2 border-hairline p-4">
+    <fieldset className="grid min-w-0 gap-4 rounded border-2 border-hairline p-3 sm:p-4">
       <legend className="px-2 font-bold">{index === 0 ? 'Every' : 'Or every'}</legend>
-      <RadioGroup
+      <Select
         label="Counted by"
-        name={`${path}.on`}
         id={`${path}.on`}
-        look="segmented"
         options={KINDS}
         value={trigger.on}
         disabled={form.readOnly}
@@ -94,7 +93,6 @@ function MeterFields({ form, trigger, path, put }: FieldsProps) {
       <NumberInput
         label="First at"
         optional
-        hint="If not after one interval"
         id={`${path}.first`}
         suffix={suffix}
         whole={whole}
