@@ -1,4 +1,4 @@
-import type { Insertable, Kysely, Selectable } from 'kysely';
+import type { Insertable, Kysely, Selectable, Updateable } from 'kysely';
 import type { DB, DockTable } from '../tables';
 
 export type DockRow = Selectable<DockTable>;
@@ -15,4 +15,13 @@ export function findDock(db: Kysely<DB>, id: string): Promise<DockRow | undefine
 
 export function insertDock(db: Kysely<DB>, row: Insertable<DockTable>): Promise<DockRow> {
   return db.insertInto('dock').values(row).returningAll().executeTakeFirstOrThrow();
+}
+
+/** Changes a dock; answers it as it is now, undefined when there is none. */
+export function updateDock(
+  db: Kysely<DB>,
+  id: string,
+  row: Updateable<DockTable>,
+): Promise<DockRow | undefined> {
+  return db.updateTable('dock').set(row).where('id', '=', id).returningAll().executeTakeFirst();
 }

@@ -1,4 +1,4 @@
-import type { Insertable, Kysely, Selectable } from 'kysely';
+import type { Insertable, Kysely, Selectable, Transaction, Updateable } from 'kysely';
 import type { DB, ModelTable } from '../tables';
 
 export type ModelRow = Selectable<ModelTable>;
@@ -13,4 +13,18 @@ export function findModel(db: Kysely<DB>, id: string): Promise<ModelRow | undefi
 
 export function insertModel(db: Kysely<DB>, row: Insertable<ModelTable>): Promise<ModelRow> {
   return db.insertInto('model').values(row).returningAll().executeTakeFirstOrThrow();
+}
+
+/** The model, locked against others who change it. */
+export function lockModel(trx: Transaction<DB>, id: string): Promise<ModelRow | undefined> {
+  return trx.selectFrom('model').selectAll().where('id', '=', id).forUpdate().executeTakeFirst();
+}
+
+/** Changes a model; answers it as it is now. `row` names at least one column. */
+export function updateModel(
+  trx: Transaction<DB>,
+  id: string,
+  row: Updateable<ModelTable>,
+): Promise<ModelRow> {
+  return trx.updateTable('model').set(row).where('id', '=', id).returningAll().executeTakeFirstOrThrow();
 }

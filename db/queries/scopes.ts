@@ -33,3 +33,11 @@ export async function listScopedUnits(
 export async function lockScopes(trx: Transaction<DB>): Promise<void> {
   await sql`lock table unit in share mode`.execute(trx);
 }
+
+/**
+ * For a write that changes which rules units come under without touching `unit`: waits for rules that are being
+ * written, and makes them wait, as a write to `unit` does. Takes it before any other lock.
+ */
+export async function lockScopesForChange(trx: Transaction<DB>): Promise<void> {
+  await sql`lock table unit in row exclusive mode`.execute(trx);
+}

@@ -1,3 +1,4 @@
+import { findModel, type ModelRow } from '@/db/queries/models';
 import { findClosure, type ClosureRow } from '@/db/queries/closures';
 import { findDefect, type DefectRow } from '@/db/queries/defects';
 import { findLayUp, type LayUpRow } from '@/db/queries/lay-ups';
@@ -75,6 +76,19 @@ export async function accessRule(
   const row = await findRule(ctx.db, ruleId);
   if (!row) throw refuseField(path, 'is no rule of this fleet', 'not_found');
   return row as Checked<NamedRuleRow>;
+}
+
+/** The model. Throws `forbidden`, or `not_found` on `path`. */
+export async function accessModel(
+  ctx: Context,
+  modelId: string,
+  act: FleetAct,
+  path = 'id',
+): Promise<Checked<ModelRow>> {
+  requireFleetWide(ctx, act);
+  const row = await findModel(ctx.db, modelId);
+  if (!row) throw refuseField(path, 'is no model of this fleet', 'not_found');
+  return row as Checked<ModelRow>;
 }
 
 /** The task, with its unit's dock. Throws `not_found` on `path`, or `forbidden`. */

@@ -2,13 +2,13 @@ import { insertDock } from '@/db/queries/docks';
 import type { Context } from '@/lib/context';
 import type { CreateDock, Dock } from '@/lib/schemas/dock';
 import { requireFleetWide } from './access';
-import { toDock } from './shape-dock';
 import { refusingTaken } from './refusing-taken';
+import { DOCK_NAME, toDock } from './shape-dock';
 
 /** Adds a dock. Managers of all docks only. Throws `conflict` on `name` when a dock has that name already. */
 export async function createDock(ctx: Context, input: CreateDock): Promise<Dock> {
   requireFleetWide(ctx, 'dock.write');
-  const row = await refusingTaken({ dock_name: ['name', 'A dock has that name already.'] }, () =>
+  const row = await refusingTaken(DOCK_NAME, () =>
     insertDock(ctx.db, {
       name: input.name,
       time_zone: input.timeZone,

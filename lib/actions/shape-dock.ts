@@ -12,3 +12,8 @@ export function toDock(row: DockRow): Dock {
     craftNumbers: row.craft_numbers,
   };
 }
+
+/** What the unique index of `dock` says. */
+export const DOCK_NAME: Record<string, [path: string, message: string]> = {
+  dock_name: ['name', 'A dock has that name already.'],
+};

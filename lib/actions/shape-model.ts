@@ -11,6 +11,11 @@ export function toModel(row: ModelRow): Model {
     engines: row.engines,
     cylinders: row.cylinders,
     carbCount: row.carb_count,
-    specs: row.specs,
+    specs: row.specs as Model['specs'],
   };
 }
+
+/** What the unique index of `model` says. */
+export const MODEL_NAME: Record<string, [path: string, message: string]> = {
+  model_name: ['name', 'A model has that name already.'],
+};

@@ -13,13 +13,28 @@ const monthDay = z
   .string('give a day as MM-DD')
   .refine((text) => isCalendarDay(`2000-${text}`), 'is not a day of the year (MM-DD)');
 
+const season = z.strictObject({ from: monthDay, to: monthDay });
+const openWeekdays = z.array(z.enum(WEEKDAYS)).min(1, 'name at least one weekday').max(7);
+
 export const createDock = z.strictObject({
   name: line(80),
   timeZone,
-  season: z.strictObject({ from: monthDay, to: monthDay }).optional(),
-  openWeekdays: z.array(z.enum(WEEKDAYS)).min(1, 'name at least one weekday').max(7).optional(),
+  season: season.optional(),
+  openWeekdays: openWeekdays.optional(),
   craftNumbers: z.enum(['us', 'other']).optional(),
 });
+
+/** Only what is named changes; a season of null is no season: open all year. */
+export const changeDock = z
+  .strictObject({
+    name: line(80),
+    timeZone,
+    season: season.nullable(),
+    openWeekdays,
+    craftNumbers: z.enum(['us', 'other']),
+  })
+  .partial()
+  .refine((input) => Object.keys(input).length > 0, 'names nothing to change');
 
 export const dock = z.object({
   id,
@@ -30,6 +45,7 @@ export const dock = z.object({
   craftNumbers: z.enum(['us', 'other']),
 });
 
+export type ChangeDock = z.output<typeof changeDock>;
 export type CreateDock = z.output<typeof createDock>;
 export type Dock = z.output<typeof dock>;
 

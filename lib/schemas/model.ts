@@ -6,25 +6,61 @@ const STROKES = ['two', 'four'] as const;
 const whole = (max: number) =>
   z.int('give a whole number').min(0, 'cannot be below 0').max(max, `cannot be above ${max}`);
 
-export const createModel = z
-  .strictObject({
-    name: line(80),
-    propulsion: z.enum(PROPULSIONS),
-    stroke: z.enum(STROKES).optional(),
-    engines: whole(4).min(1, 'is at least 1'),
-    cylinders: whole(16),
-    carbCount: whole(16),
-    specs: z.record(z.string().max(60), z.unknown()).optional(),
-  })
-  .superRefine((model, ctx) => {
-    const electric = model.propulsion === 'electric';
-    if (electric && model.stroke)
-      ctx.addIssue({ code: 'custom', path: ['stroke'], message: 'an electric motor has no stroke' });
-    if (electric && model.carbCount > 0)
-      ctx.addIssue({ code: 'custom', path: ['carbCount'], message: 'an electric motor has no carburettor' });
-    if (!electric && !model.stroke)
-      ctx.addIssue({ code: 'custom', path: ['stroke'], message: 'say two or four stroke' });
+const limit = z.number('give a number').min(-1e9, 'is too small').max(1e9, 'is too large').optional();
+
+/** The limits of one measurement, each optional, in the unit of measure named: `{"min": 150, "unit": "psi"}`. */
+const spec = z
+  .strictObject(
+    { min: limit, max: limit, target: limit, unit: line(20).optional() },
+    'give min, max, target or unit',
+  )
+  .superRefine(({ min, max, target }, ctx) => {
+    const say = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });
+    if (min !== undefined && max !== undefined && max < min) say('max', 'is below the least');
+    if (target !== undefined && min !== undefined && target < min) say('target', 'is below the least');
+    if (target !== undefined && max !== undefined && target > max) say('target', 'is above the most');
   });
+
+/** By the measurement's name: `{"Compression": {"min": 150, "max": 180, "unit": "psi"}}`. */
+const specs = z
+  .record(line(60), spec, 'give specs by name')
+  .refine((value) => Object.keys(value).length <= 60, 'has more than 60 specs');
+
+const fields = {
+  name: line(80),
+  propulsion: z.enum(PROPULSIONS),
+  engines: whole(4).min(1, 'is at least 1'),
+  cylinders: whole(16),
+  carbCount: whole(16),
+};
+
+type Engine = { propulsion: string; stroke?: string | null | undefined; carbCount: number };
+
+/** What of a model contradicts itself, by field: an electric motor has no stroke, any other engine has one. */
+export function findEngineFaults({
+  propulsion,
+  stroke,
+  carbCount,
+}: Engine): { path: string; message: string }[] {
+  if (propulsion !== 'electric') return stroke ? [] : [{ path: 'stroke', message: 'say two or four stroke' }];
+  return [
+    ...(stroke ? [{ path: 'stroke', message: 'an electric motor has no stroke' }] : []),
+    ...(carbCount > 0 ? [{ path: 'carbCount', message: 'an electric motor has no carburettor' }] : []),
+  ];
+}
+
+export const createModel = z
+  .strictObject({ ...fields, stroke: z.enum(STROKES).optional(), specs: specs.optional() })
+  .superRefine((model, ctx) => {
+    for (const { path, message } of findEngineFaults(model))
+      ctx.addIssue({ code: 'custom', path: [path], message });
+  });
+
+/** Only what is named changes; a stroke of null takes it away, specs are replaced as a whole. */
+export const changeModel = z
+  .strictObject({ ...fields, stroke: z.enum(STROKES).nullable(), specs })
+  .partial()
+  .refine((input) => Object.keys(input).length > 0, 'names nothing to change');
 
 export const model = z.object({
   id,
@@ -34,8 +70,10 @@ export const model = z.object({
   engines: z.int(),
   cylinders: z.int(),
   carbCount: z.int(),
-  specs: z.record(z.string(), z.unknown()),
+  specs,
 });
 
 export type CreateModel = z.output<typeof createModel>;
+export type ChangeModel = z.output<typeof changeModel>;
 export type Model = z.output<typeof model>;
+export type Spec = z.output<typeof spec>;
