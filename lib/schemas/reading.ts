@@ -2,6 +2,16 @@ import { z } from 'zod';
 import { meterSwap, reviewCode } from './check-in';
 import { hours, id, instant, line, pageQuery, text } from './common';
 
+export const READING_SOURCES = [
+  'entry',
+  'check_in',
+  'logged',
+  'swap_final',
+  'swap_first',
+  'closure',
+  'correction',
+] as const;
+
 /** A reading without an outing. */
 export const createReading = z.strictObject({
   id,
@@ -45,7 +55,7 @@ export const reading = z.object({
   dockName: z.string(),
   timeZone: z.string(),
   at: z.string(),
-  source: z.enum(['entry', 'check_in', 'logged', 'swap_final', 'swap_first', 'closure', 'correction']),
+  source: z.enum(READING_SOURCES),
   engineHours: z.number(),
   shownHours: z.number(),
   /** The reading before it, on whichever meter. */
