@@ -72,10 +72,6 @@ export async function countDigestMails(db: Kysely<DB>, recipient: string, since:
   return count;
 }
 
-export async function replaceDigestWanted(db: Kysely<DB>, personId: string, wanted: boolean): Promise<void> {
-  await db.updateTable('person').set({ digest_wanted: wanted }).where('id', '=', personId).execute();
-}
-
 /** Ends the digest for whoever holds this key. Answers whether anybody does; a second time is no different. */
 export async function endDigestByKey(db: Kysely<DB>, key: string): Promise<boolean> {
   const { numUpdatedRows } = await db

@@ -6,8 +6,6 @@ export const digestQuery = z.strictObject({
   weekOn: day.refine((value) => weekdayOf(value) === 'MO', 'is not a Monday').optional(),
 });
 
-export const digestSubscription = z.strictObject({ wanted: z.boolean('say true or false') });
-
 export const unsubscribeParams = z.object({ key: z.uuid('is not a key of ours') });
 
 export const digestPreview = z.object({
@@ -33,6 +31,5 @@ export const digestSending = z.object({
 });
 
 export type DigestQuery = z.output<typeof digestQuery>;
-export type DigestSubscription = z.output<typeof digestSubscription>;
 export type DigestPreview = z.output<typeof digestPreview>;
 export type DigestSending = z.output<typeof digestSending>;
