@@ -1,9 +1,11 @@
 import { z } from 'zod';
-import { weekdayOf } from '@/lib/domain/calendar-day';
+import { isCalendarDay, weekdayOf } from '@/lib/domain/calendar-day';
 import { day } from './common';
 
 export const digestQuery = z.strictObject({
-  weekOn: day.refine((value) => weekdayOf(value) === 'MO', 'is not a Monday').optional(),
+  weekOn: day
+    .refine((value) => !isCalendarDay(value) || weekdayOf(value) === 'MO', 'is not a Monday')
+    .optional(),
 });
 
 export const unsubscribeParams = z.object({ key: z.uuid('is not a key of ours') });
