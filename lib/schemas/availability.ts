@@ -55,3 +55,19 @@ export type HoldShown = z.output<typeof hold>;
 export type ReadyUnit = Availability['ready'][number];
 export type OutUnit = Availability['out'][number];
 export type HeldUnit = Availability['held'][number];
+
+/** How one unit stands, with its last reading. */
+export const unitReadiness = z.object({
+  ...standing,
+  state: z.enum(['ready', 'out', 'held']),
+  holds: z.array(hold),
+  dockName: z.string(),
+  timeZone: z.string(),
+  shownHours: z.number(),
+  readAt: z.string(),
+  outings: z.int(),
+  outingId: id.nullable(),
+  startedAt: z.string().nullable(),
+  dueBackAt: z.string().nullable(),
+});
+export type UnitReadiness = z.output<typeof unitReadiness>;

@@ -1,0 +1,27 @@
+import type { WaterlineUnit } from '@/components/waterline/geometry';
+import type { UnitState } from '@/components/state/state-words';
+import type { ReadyUnit } from '@/lib/schemas/availability';
+
+/** What is left before the next hold, by every measure that counts: "12.4 h · 30 outings · 9 days". */
+export function roomText(unit: ReadyUnit): string {
+  const { hoursToHold: hours, outingsToHold: outings, daysToHold: days } = unit;
+  const left = [
+    hours === null ? null : `${hours.toFixed(1)} h`,
+    outings === null ? null : `${outings} ${outings === 1 ? 'outing' : 'outings'}`,
+    days === null ? null : `${days} ${days === 1 ? 'day' : 'days'}`,
+  ].filter((text) => text !== null);
+  if (left.length === 0) return 'No hold ahead';
+  const rule = unit.holdingRuleName ? `, first ${unit.holdingRuleName}` : '';
+  return `${left.join(' or ')} left${rule}`;
+}
+
+/** The unit as the water line draws it. */
+export function toWaterline(unit: ReadyUnit, state: UnitState, href?: string): WaterlineUnit {
+  return {
+    fleetNumber: unit.fleetNumber,
+    href,
+    tenthsToHold: unit.hoursToHold === null ? null : Math.round(unit.hoursToHold * 10),
+    daysToHold: unit.daysToHold,
+    state,
+  };
+}
