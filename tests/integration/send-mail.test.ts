@@ -151,3 +151,30 @@ test('a sender whose claim ran out before the server was ready for the letter se
   await expect(slow).rejects.toThrow('the claim on the letter was lost');
   expect(server.taken).toHaveLength(1);
 });
+
+test('a server that hangs up in the middle of the conversation gets the letter again, and keeps one', async () => {
+  let calls = 0;
+  server.behave({
+    greet: (go) => {
+      calls += 1;
+      if (calls === 1) go(refusal(421, 'going down'));
+      else go();
+    },
+    body: (go) => {
+      if (calls === 2) go(refusal(451, 'lost my disk'));
+      else go();
+    },
+  });
+  await startWorkers(1);
+  const id = await queue();
+  await expect
+    .poll(
+      async () => {
+        await hurry();
+        return isSent(id);
+      },
+      { timeout: 20_000 },
+    )
+    .toBe(true);
+  expect({ calls, taken: server.taken.length }).toEqual({ calls: 3, taken: 1 });
+});
