@@ -62,6 +62,12 @@ export async function listUnitIds(db: Kysely<DB>): Promise<string[]> {
   return rows.map((row) => row.id);
 }
 
+/** The retired units of these docks by fleet number. */
+export function listRetiredUnits(db: Kysely<DB>, dockIds: 'all' | readonly string[]): Promise<UnitRow[]> {
+  const query = selectUnits(db).where('unit.retired_at', 'is not', null).orderBy('unit.fleet_number');
+  return (dockIds === 'all' ? query : query.where('unit.dock_id', 'in', [...dockIds])).execute();
+}
+
 export function insertUnit(db: Kysely<DB>, row: Insertable<UnitTable>) {
   return db.insertInto('unit').values(row).returning('id').executeTakeFirstOrThrow();
 }

@@ -1,0 +1,59 @@
+import type { Metadata } from 'next';
+import { UnitActions } from '@/components/units/UnitActions';
+import { UnitDuties } from '@/components/units/UnitDuties';
+import { UnitFacts } from '@/components/units/UnitFacts';
+import { UnitHistory } from '@/components/units/UnitHistory';
+import { UnitMeter } from '@/components/units/UnitMeter';
+import { UnitStanding } from '@/components/units/UnitStanding';
+import { LinkButton } from '@/components/ui/LinkButton';
+import { Notice } from '@/components/ui/Notice';
+import { PageHeader } from '@/components/ui/PageHeader';
+import { openUnit } from '@/lib/actions/open-unit';
+import { pageContext } from '@/lib/auth/page';
+import { orNotFound, pageId } from '@/lib/auth/page-row';
+import { unitPageQuery } from '@/lib/schemas/fleet';
+
+export const metadata: Metadata = { title: 'Unit' };
+
+type Props = {
+  params: Promise<{ id: string }>;
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
+};
+
+export default async function UnitPage({ params, searchParams }: Props) {
+  const query = unitPageQuery.parse(await searchParams);
+  const page = await orNotFound(openUnit(await pageContext(), await pageId(params), query));
+  const { unit, duties, may } = page;
+  return (
+    <>
+      <PageHeader
+        kicker={`${unit.modelName} · ${unit.dockName}`}
+        title={<span className="numerals">{unit.fleetNumber}</span>}
+        actions={<UnitActions page={page} />}
+      />
+      <div className="grid gap-10">
+        <UnitStanding page={page} />
+        <UnitMeter page={page} />
+        <section className="grid gap-4">
+          <div className="flex flex-wrap items-end justify-between gap-3">
+            <h2 className="text-2xl">What comes due</h2>
+            {may.recordBaseline ? (
+              <LinkButton href={`/units/${unit.id}/baselines`}>Last done before it came</LinkButton>
+            ) : null}
+          </div>
+          {duties.assessed || unit.state === null ? null : (
+            <Notice still title="Not yet assessed">
+              Its due points are being worked out; what is shown may be what held before.
+            </Notice>
+          )}
+          <UnitDuties duties={duties} />
+        </section>
+        <section className="grid gap-4">
+          <h2 className="text-2xl">About the unit</h2>
+          <UnitFacts unit={unit} />
+        </section>
+        <UnitHistory page={page} />
+      </div>
+    </>
+  );
+}
