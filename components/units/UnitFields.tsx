@@ -58,43 +58,7 @@ export function UnitFields({ data, error }: Props) {
           />
         </div>
       </Section>
-      <Section
-        title="Numbers on the craft"
-        hint={
-          american
-            ? 'Checked against the US federal formats, as the dock says.'
-            : 'Of another country, as the dock says: taken as you write them.'
-        }
-      >
-        <div className="grid gap-5 sm:grid-cols-2">
-          <TextInput
-            name="hin"
-            label="Hull number (HIN)"
-            hint={american ? '12 letters and digits, on the transom.' : undefined}
-            optional
-            maxLength={30}
-            autoComplete="off"
-            autoCapitalize="characters"
-            spellCheck={false}
-            className="numerals"
-            defaultValue={unit?.hin ?? ''}
-            error={error('hin')}
-          />
-          <TextInput
-            name="registration"
-            label="Registration"
-            hint={american ? 'As NH 1234 BD, on the bow.' : undefined}
-            optional
-            maxLength={20}
-            autoComplete="off"
-            autoCapitalize="characters"
-            spellCheck={false}
-            className="numerals"
-            defaultValue={unit?.registration ?? ''}
-            error={error('registration')}
-          />
-        </div>
-      </Section>
+      <CraftNumbers unit={unit} american={american} error={error} />
       <Section title="Engine">
         <div className="grid gap-5 sm:grid-cols-2">
           {unit ? null : <FirstMeter error={error} />}
@@ -114,6 +78,52 @@ export function UnitFields({ data, error }: Props) {
         </div>
       </Section>
     </>
+  );
+}
+
+function CraftNumbers({
+  unit,
+  american,
+  error,
+}: Pick<Props, 'error'> & { unit: UnitFormData['unit']; american: boolean }) {
+  return (
+    <Section
+      title="Numbers on the craft"
+      hint={
+        american
+          ? 'Checked against the US federal formats, as the dock says.'
+          : 'Of another country, as the dock says: taken as you write them.'
+      }
+    >
+      <div className="grid gap-5 sm:grid-cols-2">
+        <TextInput
+          name="hin"
+          label="Hull number (HIN)"
+          hint={american ? '12 letters and digits, on the transom.' : undefined}
+          optional
+          maxLength={30}
+          autoComplete="off"
+          autoCapitalize="characters"
+          spellCheck={false}
+          className="numerals"
+          defaultValue={unit?.hin ?? ''}
+          error={error('hin')}
+        />
+        <TextInput
+          name="registration"
+          label="Registration"
+          hint={american ? 'As NH 1234 BD, on the bow.' : undefined}
+          optional
+          maxLength={20}
+          autoComplete="off"
+          autoCapitalize="characters"
+          spellCheck={false}
+          className="numerals"
+          defaultValue={unit?.registration ?? ''}
+          error={error('registration')}
+        />
+      </div>
+    </Section>
   );
 }
 

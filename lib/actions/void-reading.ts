@@ -17,7 +17,7 @@ import { personIdOf } from '@/lib/domain/access';
 import { checkReading, formatTenths } from '@/lib/domain/meter';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { refuseField } from '@/lib/errors';
-import type { VoidReading } from '@/lib/schemas/reading';
+import type { VoidedReading, VoidReading } from '@/lib/schemas/reading';
 import { toHours, toTenths } from '@/lib/schemas/schedule-shape';
 import { accessReading } from './access';
 import { enqueueRefresh } from './assess-again';
@@ -31,7 +31,7 @@ import { refuseReading, requireTimeUntil } from './refuse-reading';
  * Throws `not_found`, `forbidden`, `conflict` on `id`, `invalid_input` on `replacement` or `outingHappened`, and
  * `reading_refused` on `replacement.hours` when it does not fit between its neighbours.
  */
-export async function voidReading(ctx: Context, id: string, input: VoidReading) {
+export async function voidReading(ctx: Context, id: string, input: VoidReading): Promise<VoidedReading> {
   const reading = await accessReading(ctx, id, 'reading.void');
   const voided = { at: ctx.now, by: personIdOf(ctx.actor), reason: input.reason };
   return runTransaction(ctx.db, async (trx) => {

@@ -13,7 +13,13 @@ type Parsed<T> = T extends z.ZodType ? z.output<T> : undefined;
 type Spec<P, Q, B> = { params?: P; query?: Q; body?: B; status?: number };
 type Input<P, Q, B> = { params: Parsed<P>; query: Parsed<Q>; body: Parsed<B>; request: Request };
 type Route = { params: Promise<Record<string, string | string[]>> };
-type Handler = (request: Request, route: Route) => Promise<Response>;
+type Run = (request: Request, route: Route) => Promise<unknown>;
+/** What a verb was declared with, for whoever compares routes with the API's description. */
+type Declared = {
+  spec: Spec<z.ZodType | undefined, z.ZodType | undefined, z.ZodType | undefined>;
+  open: boolean;
+};
+export type Handler = ((request: Request, route: Route) => Promise<Response>) & Declared;
 
 /**
  * One verb of a route: who asks, is what was sent right, call, answer. `run` returns what is sent as JSON with
@@ -24,7 +30,7 @@ export function handle<
   Q extends z.ZodType | undefined = undefined,
   B extends z.ZodType | undefined = undefined,
 >(spec: Spec<P, Q, B>, run: (ctx: PersonContext, input: Input<P, Q, B>) => Promise<unknown>): Handler {
-  return answering(spec, async (request, route) => {
+  return answering({ spec, open: false }, async (request, route) => {
     const actor = await findActor(getDatabase(), request.headers);
     if (!actor) throw new Refusal('not_signed_in', 'Sign in, or send a valid API key.');
     if (actor.sessionId !== null) checkSameSite(request);
@@ -38,21 +44,18 @@ export function handlePublic<
   Q extends z.ZodType | undefined = undefined,
   B extends z.ZodType | undefined = undefined,
 >(spec: Spec<P, Q, B>, run: (ctx: Context, input: Input<P, Q, B>) => Promise<unknown>): Handler {
-  return answering(spec, async (request, route) =>
+  return answering({ spec, open: true }, async (request, route) =>
     run({ db: getDatabase(), actor: SYSTEM, now: new Date() }, await parseInput(spec, request, route)),
   );
 }
 
-function answering(
-  spec: { status?: number },
-  run: Handler | ((r: Request, x: Route) => Promise<unknown>),
-): Handler {
-  return async (request, route) => {
+function answering(declared: Declared, run: Run): Handler {
+  const handler = async (request: Request, route: Route) => {
     try {
       const answer = await run(request, route);
       if (answer instanceof Response) return answer;
       return Response.json(answer ?? null, {
-        status: spec.status ?? 200,
+        status: declared.spec.status ?? 200,
         headers: { 'cache-control': 'no-store' },
       });
     } catch (error) {
@@ -60,6 +63,7 @@ function answering(
       return problemResponse(error);
     }
   };
+  return Object.assign(handler, declared);
 }
 
 async function parseInput<P, Q, B>(

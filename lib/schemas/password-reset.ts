@@ -3,6 +3,7 @@ import { linkToken } from './invitation';
 import { email, newPassword } from './person';
 
 export const askPasswordReset = z.strictObject({ email });
+export const resetAsked = z.object({ detail: z.string() });
 export const resetPassword = z.strictObject({ token: linkToken, password: newPassword });
 
 export type AskPasswordReset = z.output<typeof askPasswordReset>;

@@ -41,6 +41,22 @@ export const voidReading = z.strictObject({
 
 export const reviewReading = z.strictObject({ note: text(500).optional() });
 
+export const voidedReading = z.object({
+  id,
+  unitId: id,
+  voidedAt: z.string(),
+  replacementId: id.nullable(),
+  engineHours: z.number(),
+  outings: z.int(),
+});
+
+export const reviewedReading = z.object({
+  id,
+  unitId: id,
+  reviewedAt: z.string(),
+  note: z.string().nullable(),
+});
+
 export const readingsQuery = z.object({
   unitId: id.optional(),
   review: z.literal('open', 'is "open" or left out').optional(),
@@ -76,6 +92,8 @@ export const reading = z.object({
 export type CreateReading = z.output<typeof createReading>;
 export type KeptReading = z.output<typeof keptReading>;
 export type VoidReading = z.output<typeof voidReading>;
+export type VoidedReading = z.output<typeof voidedReading>;
+export type ReviewedReading = z.output<typeof reviewedReading>;
 export type ReviewReading = z.output<typeof reviewReading>;
 export type ReadingsQuery = z.output<typeof readingsQuery>;
 export type Reading = z.output<typeof reading>;

@@ -1,0 +1,91 @@
+import { digestPreview, digestQuery, digestSending, unsubscribeParams } from './digest';
+import { openApi } from './openapi';
+import type { Operation } from './operation';
+import { setUp, setUpDone } from './setup';
+import { health, readiness } from './worker';
+
+/** The server itself: setting it up, its health, the digest it sends, and this description. */
+export const SERVER_OPERATIONS: readonly Operation[] = [
+  {
+    id: 'setUp',
+    method: 'POST',
+    path: '/setup',
+    tag: 'Server',
+    summary: 'Make the operator, the first dock and the first manager, once',
+    open: true,
+    body: setUp,
+    status: 201,
+    answer: setUpDone,
+  },
+  {
+    id: 'previewDigest',
+    method: 'GET',
+    path: '/digest/preview',
+    tag: 'Server',
+    summary: 'The digest as it would be sent',
+    query: digestQuery,
+    status: 200,
+    answer: digestPreview,
+  },
+  {
+    id: 'sendDigestNow',
+    method: 'POST',
+    path: '/digest/sending',
+    tag: 'Server',
+    summary: 'Send oneself the digest now',
+    status: 202,
+    answer: digestSending,
+  },
+  {
+    id: 'askUnsubscribe',
+    method: 'GET',
+    path: '/unsubscribe/{key}',
+    tag: 'Server',
+    summary: 'A page that asks whether to stop the digest',
+    open: true,
+    params: unsubscribeParams,
+    status: 200,
+    answer: 'html',
+  },
+  {
+    id: 'unsubscribe',
+    method: 'POST',
+    path: '/unsubscribe/{key}',
+    tag: 'Server',
+    summary: 'Stop the digest (RFC 8058)',
+    open: true,
+    params: unsubscribeParams,
+    status: 200,
+    answer: 'html',
+  },
+  {
+    id: 'getHealth',
+    method: 'GET',
+    path: '/health',
+    tag: 'Server',
+    summary: 'Whether the process is up',
+    open: true,
+    status: 200,
+    answer: health,
+  },
+  {
+    id: 'getReady',
+    method: 'GET',
+    path: '/ready',
+    tag: 'Server',
+    summary: 'Whether the database is reached and current, and how far behind the worker is',
+    open: true,
+    status: 200,
+    answer: readiness,
+  },
+  {
+    id: 'getOpenApi',
+    method: 'GET',
+    path: '/openapi.json',
+    tag: 'Server',
+    summary: 'This document',
+    open: true,
+    status: 200,
+    answer: openApi,
+  },
+];
