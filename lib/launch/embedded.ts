@@ -1,4 +1,3 @@
-import { existsSync } from 'node:fs';
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
 import type { Kysely } from 'kysely';
@@ -70,10 +69,6 @@ type SeedDemo = (db: Kysely<DB>, options: { now: Date; progress(line: string): v
 /** Loads the demo into a migrated, empty database. */
 export async function loadDemo(url: string): Promise<void> {
   const file = path.resolve('db/seed/demo.ts');
-  if (!existsSync(file)) {
-    console.log('  this version has no demo fleet yet');
-    return;
-  }
   const { seedDemo } = (await import(pathToFileURL(file).href)) as { seedDemo: SeedDemo };
   const db = createDatabase({ url, applicationName: 'wakewright-demo', statementTimeoutMs: 0 });
   try {
