@@ -6,6 +6,7 @@ import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
 import { fieldError, formError, send } from '@/lib/client/api';
 import { rawOf, textOf } from '@/lib/client/form-values';
+import { goTo } from '@/lib/client/go-to';
 import { signIn } from '@/lib/client/sign-in';
 import { useSend } from '@/lib/client/use-send';
 import { NewPasswordInput } from './NewPasswordInput';
@@ -20,7 +21,7 @@ export function AcceptForm({ token, name, email }: { token: string; name: string
     const body = { token, name: textOf(form, 'name'), password };
     const accepted = await run(() => send('POST', '/api/v1/invitations/acceptance', body));
     if (!accepted) return;
-    window.location.assign((await run(() => signIn(email, password))) ? '/' : '/sign-in');
+    goTo((await run(() => signIn(email, password))) ? '/' : '/sign-in');
   }
   const error = formError(failure, ['name', 'password']);
   return (

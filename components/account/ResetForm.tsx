@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import { fieldError, formError, send } from '@/lib/client/api';
 import { rawOf } from '@/lib/client/form-values';
+import { goTo } from '@/lib/client/go-to';
 import { useSend } from '@/lib/client/use-send';
 import { NewPasswordInput } from './NewPasswordInput';
 
@@ -15,7 +16,7 @@ export function ResetForm({ token, email }: { token: string; email: string }) {
     event.preventDefault();
     const password = rawOf(event.currentTarget, 'password');
     const done = await run(() => send('POST', '/api/v1/password-resets/completion', { token, password }));
-    if (done) window.location.assign('/sign-in?after=reset');
+    if (done) goTo('/sign-in?after=reset');
   }
   const error = formError(failure, ['password']);
   return (

@@ -6,6 +6,7 @@ import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
 import { fieldError, formError } from '@/lib/client/api';
+import { goTo } from '@/lib/client/go-to';
 import { signIn } from '@/lib/client/sign-in';
 import { useSend } from '@/lib/client/use-send';
 
@@ -16,7 +17,7 @@ export function SignInForm({ next }: { next: string }) {
     event.preventDefault();
     const given = new FormData(event.currentTarget);
     const [email, password] = [String(given.get('email')), String(given.get('password'))];
-    if (await run(() => signIn(email, password))) window.location.assign(next);
+    if (await run(() => signIn(email, password))) goTo(next);
   }
   const error = formError(failure, ['email', 'password']);
   return (

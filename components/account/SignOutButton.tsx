@@ -2,6 +2,7 @@
 
 import { Button } from '@/components/ui/Button';
 import { FieldError } from '@/components/ui/Field';
+import { goTo } from '@/lib/client/go-to';
 import { signOut } from '@/lib/client/sign-in';
 import { useSend } from '@/lib/client/use-send';
 
@@ -9,7 +10,7 @@ import { useSend } from '@/lib/client/use-send';
 export function SignOutButton() {
   const { busy, failure, run } = useSend();
   async function leave() {
-    if (await run(signOut)) window.location.assign('/sign-in');
+    if (await run(signOut)) goTo('/sign-in');
   }
   return (
     <div className="grid gap-2">

@@ -8,6 +8,7 @@ import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
 import { fieldError, send } from '@/lib/client/api';
 import { rawOf, textOf } from '@/lib/client/form-values';
+import { goTo } from '@/lib/client/go-to';
 import { signIn } from '@/lib/client/sign-in';
 import { useSend } from '@/lib/client/use-send';
 import { FirstDockFields } from './FirstDockFields';
@@ -23,7 +24,7 @@ export function SetupForm({ timeZones }: { timeZones: string[] }) {
     const body = readForm(event.currentTarget, allYear);
     if (!(await run(() => send('POST', '/api/v1/setup', body)))) return;
     const { email, password } = body.manager;
-    window.location.assign((await run(() => signIn(email, password))) ? '/' : '/sign-in');
+    goTo((await run(() => signIn(email, password))) ? '/' : '/sign-in');
   }
 
   return (
