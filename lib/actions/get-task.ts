@@ -1,6 +1,8 @@
 import { findHeldSince, listClosures } from '@/db/queries/closures';
+import { findRule } from '@/db/queries/rules';
 import { getTaskStanding, listTaskNotes } from '@/db/queries/tasks';
 import type { Context } from '@/lib/context';
+import { describeRule } from '@/lib/domain/rule-words';
 import type { TaskPage } from '@/lib/schemas/task';
 import { accessTask } from './access';
 import { toClosure } from './shape-closure';
@@ -11,10 +13,11 @@ export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
   await accessTask(ctx, id, 'task.read');
   const row = await getTaskStanding(ctx.db, id);
   const task = toTask(row, ctx.now);
-  const [notes, closures, heldSince] = await Promise.all([
+  const [notes, closures, heldSince, rule] = await Promise.all([
     listTaskNotes(ctx.db, id),
     listClosures(ctx.db, row),
     task.holdsUnit ? findHeldSince(ctx.db, row, ctx.now) : null,
+    row.rule_id ? findRule(ctx.db, row.rule_id) : undefined,
   ]);
   return {
     ...task,
@@ -22,6 +25,7 @@ export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
     engineHours: row.meter_tenths / 10,
     outings: row.meter_outings,
     readAt: row.meter_read_at.toISOString(),
+    ruleWords: rule ? describeRule({ ...rule, window: rule.tolerance }, { holdsUnit: rule.holds_unit }) : [],
     heldSince: heldSince?.toISOString() ?? null,
     notes: notes.map(toTaskNote),
     closures: closures.map(toClosure),

@@ -167,6 +167,8 @@ export const taskPage = task.extend({
   engineHours: z.number(),
   outings: z.int(),
   readAt: z.string(),
+  /** What the task's rule means, sentence by sentence; empty for a task without one. */
+  ruleWords: z.array(z.string()),
   heldSince: z.string().nullable(),
   notes: z.array(taskNote),
   /** This task's own, and those of the same rule on the same unit: the latest first, reversed ones included. */

@@ -1,0 +1,41 @@
+import type { Metadata } from 'next';
+import { NewTaskForm } from '@/components/task/NewTaskForm';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { LinkButton } from '@/components/ui/LinkButton';
+import { Notice } from '@/components/ui/Notice';
+import { PageHeader } from '@/components/ui/PageHeader';
+import { listUnits } from '@/lib/actions/list-units';
+import { pageContext } from '@/lib/auth/page';
+import { canSomewhere } from '@/lib/domain/access';
+
+export const metadata: Metadata = { title: 'New task' };
+
+type Query = { unit?: string | string[] };
+
+export default async function NewTaskPage({ searchParams }: { searchParams: Promise<Query> }) {
+  const ctx = await pageContext();
+  const { unit } = await searchParams;
+  const { items } = await listUnits(ctx, {});
+  const units = items.map(({ id, fleetNumber, modelName, dockName }) => ({
+    value: id,
+    label: `${fleetNumber}, ${modelName}, ${dockName}`,
+  }));
+  return (
+    <>
+      <PageHeader
+        title="New task"
+        lead="A repair, an inspection or a service that no rule asks for."
+        actions={<LinkButton href="/tasks">All tasks</LinkButton>}
+      />
+      {!canSomewhere(ctx.actor, 'task.write') ? (
+        <Notice tone="info" title="Mechanics and managers open tasks" still>
+          Report a defect with the check-in instead: its task opens by itself.
+        </Notice>
+      ) : units.length === 0 ? (
+        <EmptyState title="No units yet">A task belongs to a unit. Ask a manager to add one.</EmptyState>
+      ) : (
+        <NewTaskForm units={units} unitId={typeof unit === 'string' ? unit : ''} />
+      )}
+    </>
+  );
+}

@@ -1,0 +1,102 @@
+import type { Metadata } from 'next';
+import { TaskFilters } from '@/components/task/TaskFilters';
+import { TaskTable } from '@/components/task/TaskTable';
+import { kindWords, urgencyWords } from '@/components/task/task-words';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { LinkButton } from '@/components/ui/LinkButton';
+import { PageHeader } from '@/components/ui/PageHeader';
+import { listDocks } from '@/lib/actions/list-docks';
+import { listTasks } from '@/lib/actions/list-tasks';
+import { pageContext } from '@/lib/auth/page';
+import { orNotFound } from '@/lib/auth/page-row';
+import { canSomewhere } from '@/lib/domain/access';
+import { URGENCIES } from '@/lib/domain/urgency';
+import { tasksQuery } from '@/lib/schemas/task';
+
+export const metadata: Metadata = { title: 'Tasks' };
+
+type Query = Record<string, string | string[] | undefined>;
+
+/** What do I do next? */
+export default async function TasksPage({ searchParams }: { searchParams: Promise<Query> }) {
+  const ctx = await pageContext();
+  const { dock, ...rest } = await searchParams;
+  const query = tasksQuery.safeParse({ ...rest, dockId: dock }).data ?? tasksQuery.parse({});
+  const [docks, page] = await Promise.all([listDocks(ctx), orNotFound(listTasks(ctx, query))]);
+  const mayWork = canSomewhere(ctx.actor, 'task.write');
+  const filters = [
+    {
+      name: 'dock',
+      label: 'Dock',
+      all: 'All docks',
+      options: docks.map(({ id, name }) => ({ value: id, label: name })),
+    },
+    {
+      name: 'kind',
+      label: 'Kind',
+      all: 'All kinds',
+      options: Object.entries(kindWords).map(([value, label]) => ({ value, label })),
+    },
+    {
+      name: 'state',
+      label: 'Show',
+      all: 'Open tasks',
+      options: [
+        { value: 'closed', label: 'Ended tasks' },
+        { value: 'all', label: 'All tasks' },
+      ],
+    },
+    {
+      name: 'mine',
+      label: 'Whose',
+      all: "Everybody's",
+      options: [{ value: 'true', label: 'Started by me' }],
+    },
+  ];
+  const next = new URLSearchParams(
+    Object.entries({ ...rest, dock }).flatMap(([k, v]) => (typeof v === 'string' ? [[k, v]] : [])),
+  );
+  if (page.nextCursor) next.set('cursor', page.nextCursor);
+  return (
+    <>
+      <PageHeader
+        title="Tasks"
+        lead={query.state === 'open' ? 'What to do next, the most urgent first.' : undefined}
+        actions={mayWork ? <LinkButton href="/tasks/new">New task</LinkButton> : undefined}
+      >
+        <TaskFilters filters={filters} />
+      </PageHeader>
+      {page.items.length === 0 ? (
+        <EmptyState title="No tasks here">
+          {query.state === 'open'
+            ? 'Nothing is due at these docks, and nobody has asked for anything. A task opens by itself when a rule comes within its lead.'
+            : 'Nothing matches. Take a filter away to see more.'}
+        </EmptyState>
+      ) : query.state === 'open' ? (
+        <div className="grid gap-10">
+          {URGENCIES.map((urgency) => {
+            const tasks = page.items.filter((task) => task.urgency === urgency);
+            if (tasks.length === 0) return null;
+            const { title, lead } = urgencyWords[urgency];
+            return (
+              <section key={urgency} aria-labelledby={`urgency-${urgency}`}>
+                <h2 id={`urgency-${urgency}`} className="text-2xl">
+                  {title} <span className="numerals text-ink-soft">{tasks.length}</span>
+                </h2>
+                <p className="mb-2 text-ink-soft">{lead}</p>
+                <TaskTable caption={title} tasks={tasks} mayWork={mayWork} />
+              </section>
+            );
+          })}
+        </div>
+      ) : (
+        <TaskTable caption="Tasks" tasks={page.items} mayWork={mayWork} />
+      )}
+      {page.nextCursor ? (
+        <p className="mt-6">
+          <LinkButton href={`/tasks?${next}`}>More tasks</LinkButton>
+        </p>
+      ) : null}
+    </>
+  );
+}

@@ -1,0 +1,144 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useState, type FormEvent } from 'react';
+import { Button } from '@/components/ui/Button';
+import { ErrorSummary } from '@/components/ui/ErrorSummary';
+import { NumberInput } from '@/components/ui/NumberInput';
+import { RadioGroup } from '@/components/ui/RadioGroup';
+import { Textarea } from '@/components/ui/Textarea';
+import { TextInput } from '@/components/ui/TextInput';
+import { useToast } from '@/components/ui/Toast';
+import { fieldError, send } from '@/lib/client/api';
+import { useSend } from '@/lib/client/use-send';
+import { localInstant } from '@/lib/domain/local-instant';
+import { parseHoursToTenths } from '@/lib/domain/meter';
+import type { Closure, TaskPage } from '@/lib/schemas/task';
+
+type Closing = Pick<TaskPage, 'id' | 'title' | 'fleetNumber' | 'engineHours' | 'timeZone' | 'today'>;
+
+/** Records that a task was done. Hours are those of the live meter unless others are typed. */
+export function CloseForm({ task }: { task: Closing }) {
+  const { busy, failure, run } = useSend();
+  const live = task.engineHours.toFixed(1);
+  const [when, setWhen] = useState('now');
+  const [day, setDay] = useState(task.today);
+  const [time, setTime] = useState('12:00');
+  const [hours, setHours] = useState(live);
+  const [minutes, setMinutes] = useState('');
+  const [note, setNote] = useState('');
+  const [unread, setUnread] = useState<string | null>(null);
+  const router = useRouter();
+  const toast = useToast();
+
+  async function submit(event: FormEvent): Promise<void> {
+    event.preventDefault();
+    const parsed = hours.trim() === '' ? null : parseHoursToTenths(hours);
+    setUnread(parsed && !parsed.ok ? parsed.reason : null);
+    if (parsed && !parsed.ok) return;
+    const earlier = when === 'earlier';
+    const body = {
+      ...(earlier && day && time && { at: instantOf(day, time, task.timeZone) }),
+      ...(parsed?.ok && (earlier || hours !== live) && { engineHours: parsed.tenths / 10 }),
+      ...(minutes.trim() && { minutes: Number(minutes) }),
+      ...(note.trim() && { note }),
+    };
+    const done = await run(() => send<Closure>('POST', `/api/v1/tasks/${task.id}/closure`, body));
+    if (!done) return;
+    toast({
+      text: `${task.title} on ${task.fleetNumber} is closed at ${done.data.engineHours.toFixed(1)} h.`,
+    });
+    router.refresh();
+  }
+
+  const errors = [
+    ...(unread ? [{ path: 'engineHours', message: unread }] : []),
+    ...(failure
+      ? failure.errors.length > 0
+        ? failure.errors
+        : [{ path: '', message: failure.detail }]
+      : []),
+  ].map(({ path, message }) => ({ path: FIELDS.includes(path) ? path : '', message }));
+  return (
+    <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-5">
+      <ErrorSummary errors={errors} title="The task is not closed yet" />
+      <RadioGroup
+        name="when"
+        label="When was it done?"
+        look="segmented"
+        options={[
+          { value: 'now', label: 'Just now' },
+          { value: 'earlier', label: 'Earlier' },
+        ]}
+        value={when}
+        onChange={(event) => {
+          setWhen(event.target.value);
+          setHours(event.target.value === 'now' ? live : '');
+        }}
+      />
+      {when === 'earlier' ? (
+        <div className="flex flex-wrap gap-3">
+          <TextInput
+            id="at"
+            type="date"
+            label="Day"
+            value={day}
+            max={task.today}
+            error={fieldError(failure, 'at')}
+            onChange={(event) => setDay(event.target.value)}
+          />
+          <TextInput
+            type="time"
+            label="Time at the dock"
+            value={time}
+            onChange={(event) => setTime(event.target.value)}
+          />
+        </div>
+      ) : null}
+      <NumberInput
+        name="engineHours"
+        label="Engine hours"
+        suffix="h"
+        large
+        hint={
+          when === 'now'
+            ? `The meter stands at ${live} h.`
+            : 'Leave empty to take what the meter showed then.'
+        }
+        value={hours}
+        error={unread ?? fieldError(failure, 'engineHours')}
+        onChange={(event) => setHours(event.target.value)}
+      />
+      <NumberInput
+        name="minutes"
+        label="Time worked"
+        suffix="min"
+        whole
+        optional
+        value={minutes}
+        error={fieldError(failure, 'minutes')}
+        onChange={(event) => setMinutes(event.target.value)}
+      />
+      <Textarea
+        name="note"
+        label="What was found and done"
+        rows={3}
+        optional
+        value={note}
+        error={fieldError(failure, 'note')}
+        onChange={(event) => setNote(event.target.value)}
+      />
+      <Button type="submit" kind="primary" size="large" busy={busy}>
+        Close task
+      </Button>
+    </form>
+  );
+}
+
+const FIELDS = ['at', 'engineHours', 'minutes', 'note'];
+
+/** '2026-06-05' and '14:30' at the dock as an instant. */
+function instantOf(day: string, time: string, timeZone: string): string {
+  const [hours = 0, minutes = 0] = time.split(':').map(Number);
+  return localInstant(day, hours * 60 + minutes, timeZone).toISOString();
+}
