@@ -30,7 +30,7 @@ export function BaselineRow({
   return (
     <li className="grid gap-x-6 gap-y-3 border-t border-hairline py-4 lg:grid-cols-[14rem_minmax(0,1fr)]">
       <div>
-        <h3 className="text-lg">{duty.ruleName}</h3>
+        <h2 className="text-lg">{duty.ruleName}</h2>
         <StateMark state={duty.state} plain />
         <p className="text-ink-soft">
           {lastDone

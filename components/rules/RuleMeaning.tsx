@@ -28,7 +28,7 @@ export function RuleMeaning({
 }) {
   const unit = units.find(({ id }) => id === unitId);
   return (
-    <aside aria-label="What this rule means" className="grid content-start gap-5 rounded-hull bg-shoal p-5">
+    <section aria-label="What this rule means" className="grid content-start gap-5 rounded-hull bg-shoal p-5">
       <section aria-live="polite" className="grid gap-2">
         <h2 className="text-xl">What this rule means</h2>
         {schedule ? (
@@ -61,7 +61,7 @@ export function RuleMeaning({
         ) : null}
         <Answer preview={preview} schedule={schedule} />
       </section>
-    </aside>
+    </section>
   );
 }
 

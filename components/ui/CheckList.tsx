@@ -19,11 +19,7 @@ export function CheckList({
 }) {
   const described = describeControl(id, { hint, error });
   return (
-    <fieldset
-      className="grid min-w-0 content-start gap-1.5"
-      aria-describedby={described['aria-describedby']}
-      aria-invalid={described['aria-invalid']}
-    >
+    <fieldset className="grid min-w-0 content-start gap-1.5" aria-describedby={described['aria-describedby']}>
       <legend className="float-left mb-1.5 font-semibold">{label}</legend>
       {hint ? (
         <p id={`${id}-hint`} className="text-ink-soft">
