@@ -2,7 +2,7 @@ import type { WaterlineUnit } from '@/components/waterline/geometry';
 import type { UnitState } from '@/components/state/state-words';
 import type { ReadyUnit } from '@/lib/schemas/availability';
 
-/** What is left before the next hold, by every measure that counts: "12.4 h · 30 outings · 9 days". */
+/** What is left before the next hold, by every measure that counts: "12.4 h or 9 days left; Impeller check comes first". */
 export function roomText(unit: ReadyUnit): string {
   const { hoursToHold: hours, outingsToHold: outings, daysToHold: days } = unit;
   const left = [
@@ -11,8 +11,10 @@ export function roomText(unit: ReadyUnit): string {
     days === null ? null : `${days} ${days === 1 ? 'day' : 'days'}`,
   ].filter((text) => text !== null);
   if (left.length === 0) return 'No hold ahead';
-  const rule = unit.holdingRuleName ? `, first ${unit.holdingRuleName}` : '';
-  return `${left.join(' or ')} left${rule}`;
+  if (!unit.holdingRuleName) return `${left.join(' or ')} left`;
+  return left.length === 1
+    ? `${left[0]} left before ${unit.holdingRuleName}`
+    : `${left.join(' or ')} left; ${unit.holdingRuleName} comes first`;
 }
 
 /** The unit as the water line draws it. */

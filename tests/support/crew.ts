@@ -9,6 +9,7 @@ import { refreshDue } from '@/lib/actions/refresh-due';
 import type { Context } from '@/lib/context';
 import { SYSTEM, type PersonActor, type Role } from '@/lib/domain/access';
 import { createRule as createRuleInput } from '@/lib/schemas/rule';
+import { hashPassword } from '@/lib/secrets/password-hash';
 
 /** What the system is asked to do at an instant. */
 export function asSystem(db: Kysely<DB>, now: Date | string): Context {
@@ -89,4 +90,17 @@ export async function addPerson(db: Kysely<DB>, role: Role, dockIds: string[] = 
     dockIds,
   };
   return { actor, key, as: (now) => ({ db, actor, now }) };
+}
+
+export const PASSWORD = 'a-quiet-harbour-7';
+
+/** A person who can sign in on the page, with the e-mail address answered and PASSWORD. */
+export async function addSignIn(db: Kysely<DB>, role: Role, dockIds: string[] = []): Promise<string> {
+  const { actor } = await addPerson(db, role, dockIds);
+  await db
+    .updateTable('person')
+    .set({ password_hash: await hashPassword(PASSWORD) })
+    .where('id', '=', actor.personId)
+    .execute();
+  return actor.email;
 }
