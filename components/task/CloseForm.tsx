@@ -5,15 +5,14 @@ import { useState, type FormEvent } from 'react';
 import { Button } from '@/components/ui/Button';
 import { ErrorSummary } from '@/components/ui/ErrorSummary';
 import { NumberInput } from '@/components/ui/NumberInput';
-import { RadioGroup } from '@/components/ui/RadioGroup';
 import { Textarea } from '@/components/ui/Textarea';
-import { TextInput } from '@/components/ui/TextInput';
 import { useToast } from '@/components/ui/Toast';
 import { fieldError, send } from '@/lib/client/api';
 import { useSend } from '@/lib/client/use-send';
 import { localInstant } from '@/lib/domain/local-instant';
 import { parseHoursToTenths } from '@/lib/domain/meter';
 import type { Closure, TaskPage } from '@/lib/schemas/task';
+import { WhenFields, type When } from './WhenFields';
 
 type Closing = Pick<TaskPage, 'id' | 'title' | 'fleetNumber' | 'engineHours' | 'timeZone' | 'today'>;
 
@@ -21,9 +20,7 @@ type Closing = Pick<TaskPage, 'id' | 'title' | 'fleetNumber' | 'engineHours' | '
 export function CloseForm({ task }: { task: Closing }) {
   const { busy, failure, run } = useSend();
   const live = task.engineHours.toFixed(1);
-  const [when, setWhen] = useState('now');
-  const [day, setDay] = useState(task.today);
-  const [time, setTime] = useState('12:00');
+  const [done, setDone] = useState<When>({ when: 'now', day: task.today, time: '12:00' });
   const [hours, setHours] = useState(live);
   const [minutes, setMinutes] = useState('');
   const [note, setNote] = useState('');
@@ -36,17 +33,18 @@ export function CloseForm({ task }: { task: Closing }) {
     const parsed = hours.trim() === '' ? null : parseHoursToTenths(hours);
     setUnread(parsed && !parsed.ok ? parsed.reason : null);
     if (parsed && !parsed.ok) return;
-    const earlier = when === 'earlier';
+    const { day, time } = done;
+    const earlier = done.when === 'earlier';
     const body = {
       ...(earlier && day && time && { at: instantOf(day, time, task.timeZone) }),
       ...(parsed?.ok && (earlier || hours !== live) && { engineHours: parsed.tenths / 10 }),
       ...(minutes.trim() && { minutes: Number(minutes) }),
       ...(note.trim() && { note }),
     };
-    const done = await run(() => send<Closure>('POST', `/api/v1/tasks/${task.id}/closure`, body));
-    if (!done) return;
+    const closed = await run(() => send<Closure>('POST', `/api/v1/tasks/${task.id}/closure`, body));
+    if (!closed) return;
     toast({
-      text: `${task.title} on ${task.fleetNumber} is closed at ${done.data.engineHours.toFixed(1)} h.`,
+      text: `${task.title} on ${task.fleetNumber} is closed at ${closed.data.engineHours.toFixed(1)} h.`,
     });
     router.refresh();
   }
@@ -62,46 +60,22 @@ export function CloseForm({ task }: { task: Closing }) {
   return (
     <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-5">
       <ErrorSummary errors={errors} title="The task is not closed yet" />
-      <RadioGroup
-        name="when"
-        label="When was it done?"
-        look="segmented"
-        options={[
-          { value: 'now', label: 'Just now' },
-          { value: 'earlier', label: 'Earlier' },
-        ]}
-        value={when}
-        onChange={(event) => {
-          setWhen(event.target.value);
-          setHours(event.target.value === 'now' ? live : '');
+      <WhenFields
+        value={done}
+        today={task.today}
+        error={fieldError(failure, 'at')}
+        onChange={(next) => {
+          if (next.when !== done.when) setHours(next.when === 'now' ? live : '');
+          setDone(next);
         }}
       />
-      {when === 'earlier' ? (
-        <div className="flex flex-wrap gap-3">
-          <TextInput
-            id="at"
-            type="date"
-            label="Day"
-            value={day}
-            max={task.today}
-            error={fieldError(failure, 'at')}
-            onChange={(event) => setDay(event.target.value)}
-          />
-          <TextInput
-            type="time"
-            label="Time at the dock"
-            value={time}
-            onChange={(event) => setTime(event.target.value)}
-          />
-        </div>
-      ) : null}
       <NumberInput
         name="engineHours"
         label="Engine hours"
         suffix="h"
         large
         hint={
-          when === 'now'
+          done.when === 'now'
             ? `The meter stands at ${live} h.`
             : 'Leave empty to take what the meter showed then.'
         }

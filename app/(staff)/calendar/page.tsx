@@ -2,19 +2,15 @@ import type { Metadata } from 'next';
 import { CalendarScreen } from '@/components/calendar/CalendarScreen';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { PageHeader } from '@/components/ui/PageHeader';
-import { getCalendar } from '@/lib/actions/get-calendar';
-import { listDocks } from '@/lib/actions/list-docks';
+import { openCalendar } from '@/lib/actions/open-calendar';
+import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
-import { canSomewhere } from '@/lib/domain/access';
-import { localDay } from '@/lib/domain/calendar-day';
-import { computeRange } from '@/lib/domain/calendar-range';
 
 export const metadata: Metadata = { title: 'Calendar' };
 
 export default async function CalendarPage() {
   const ctx = await pageContext();
-  const docks = await listDocks(ctx);
-  const today = localDay(ctx.now, docks[0]?.timeZone ?? 'UTC');
+  const { docks, today, month } = await openCalendar(ctx);
   const header = (
     <PageHeader
       title="Calendar"
@@ -36,8 +32,8 @@ export default async function CalendarPage() {
       <CalendarScreen
         docks={docks.map(({ id, name }) => ({ id, name }))}
         today={today}
-        mayPlan={canSomewhere(ctx.actor, 'task.write')}
-        initial={await getCalendar(ctx, computeRange('month', today))}
+        mayPlan={may(ctx, 'task.write')}
+        initial={month}
       />
     </>
   );

@@ -1,16 +1,16 @@
 import type { Metadata } from 'next';
 import { TaskFilters } from '@/components/task/TaskFilters';
+import { TaskGroups } from '@/components/task/TaskGroups';
 import { TaskTable } from '@/components/task/TaskTable';
-import { kindWords, urgencyWords } from '@/components/task/task-words';
+import { kindWords } from '@/components/task/task-words';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { listDocks } from '@/lib/actions/list-docks';
 import { listTasks } from '@/lib/actions/list-tasks';
+import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound } from '@/lib/auth/page-row';
-import { canSomewhere } from '@/lib/domain/access';
-import { URGENCIES } from '@/lib/domain/urgency';
 import { tasksQuery } from '@/lib/schemas/task';
 
 export const metadata: Metadata = { title: 'Tasks' };
@@ -23,7 +23,7 @@ export default async function TasksPage({ searchParams }: { searchParams: Promis
   const { dock, ...rest } = await searchParams;
   const query = tasksQuery.safeParse({ ...rest, dockId: dock }).data ?? tasksQuery.parse({});
   const [docks, page] = await Promise.all([listDocks(ctx), orNotFound(listTasks(ctx, query))]);
-  const mayWork = canSomewhere(ctx.actor, 'task.write');
+  const mayWork = may(ctx, 'task.write');
   const filters = [
     {
       name: 'dock',
@@ -73,22 +73,7 @@ export default async function TasksPage({ searchParams }: { searchParams: Promis
             : 'Nothing matches. Take a filter away to see more.'}
         </EmptyState>
       ) : query.state === 'open' ? (
-        <div className="grid gap-10">
-          {URGENCIES.map((urgency) => {
-            const tasks = page.items.filter((task) => task.urgency === urgency);
-            if (tasks.length === 0) return null;
-            const { title, lead } = urgencyWords[urgency];
-            return (
-              <section key={urgency} aria-labelledby={`urgency-${urgency}`}>
-                <h2 id={`urgency-${urgency}`} className="text-2xl">
-                  {title} <span className="numerals text-ink-soft">{tasks.length}</span>
-                </h2>
-                <p className="mb-2 text-ink-soft">{lead}</p>
-                <TaskTable caption={title} tasks={tasks} mayWork={mayWork} />
-              </section>
-            );
-          })}
-        </div>
+        <TaskGroups tasks={page.items} mayWork={mayWork} />
       ) : (
         <TaskTable caption="Tasks" tasks={page.items} mayWork={mayWork} />
       )}

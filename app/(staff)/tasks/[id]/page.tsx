@@ -13,9 +13,9 @@ import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getTask } from '@/lib/actions/get-task';
+import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
-import { canAtDock } from '@/lib/domain/access';
 
 export const metadata: Metadata = { title: 'Task' };
 
@@ -24,7 +24,7 @@ export default async function TaskPage({ params }: { params: Promise<{ id: strin
   const task = await orNotFound(getTask(ctx, await pageId(params)));
   const now = ctx.now.toISOString();
   const open = task.endedAt === null;
-  const mayWork = open && canAtDock(ctx.actor, 'task.write', task.dockId);
+  const mayWork = open && may(ctx, 'task.write', task.dockId);
   return (
     <>
       <PageHeader
@@ -48,7 +48,7 @@ export default async function TaskPage({ params }: { params: Promise<{ id: strin
               Notes
             </h2>
             <TaskNotes notes={task.notes} timeZone={task.timeZone} now={now} />
-            {canAtDock(ctx.actor, 'task.write', task.dockId) ? <NoteForm taskId={task.id} /> : null}
+            {may(ctx, 'task.write', task.dockId) ? <NoteForm taskId={task.id} /> : null}
           </section>
           {task.closures.length > 0 ? (
             <section className="grid gap-4" aria-labelledby="closures">
@@ -59,7 +59,7 @@ export default async function TaskPage({ params }: { params: Promise<{ id: strin
                 closures={task.closures}
                 timeZone={task.timeZone}
                 now={now}
-                mayReverse={canAtDock(ctx.actor, 'closure.reverse', task.dockId)}
+                mayReverse={may(ctx, 'closure.reverse', task.dockId)}
               />
             </section>
           ) : null}

@@ -5,8 +5,8 @@ import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { listUnits } from '@/lib/actions/list-units';
+import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
-import { canSomewhere } from '@/lib/domain/access';
 
 export const metadata: Metadata = { title: 'New task' };
 
@@ -27,7 +27,7 @@ export default async function NewTaskPage({ searchParams }: { searchParams: Prom
         lead="A repair, an inspection or a service that no rule asks for."
         actions={<LinkButton href="/tasks">All tasks</LinkButton>}
       />
-      {!canSomewhere(ctx.actor, 'task.write') ? (
+      {!may(ctx, 'task.write') ? (
         <Notice tone="info" title="Mechanics and managers open tasks" still>
           Report a defect with the check-in instead: its task opens by itself.
         </Notice>
