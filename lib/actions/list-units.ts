@@ -1,16 +1,39 @@
-import { listUnits as listUnitRows } from '@/db/queries/units';
+import { listUnits as listUnitRows, type UnitRow } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
 import { visibleDocks } from '@/lib/domain/access';
+import { refuseField } from '@/lib/errors';
+import { readCursor, writeCursor } from '@/lib/schemas/cursor';
+import { unitPlace, type Unit, type UnitsQuery } from '@/lib/schemas/unit';
 import { requireAtDock } from './access';
 import { toUnit } from './shape-unit';
-import type { Unit } from '@/lib/schemas/unit';
 
-/** The units of the docks the actor works at, by fleet number; `dockId` narrows them. Throws `forbidden` on `dockId`. */
+const natural = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
+type Place = { fleetNumber: string; id: string };
+
+/**
+ * The units of the docks the actor works at, in the natural order of their fleet numbers; `dockId` narrows them, and
+ * without a `limit` all are answered. Throws `forbidden` on `dockId`, `invalid_input` on `cursor`.
+ */
 export async function listUnits(
   ctx: Context,
-  query: { dockId?: string },
+  query: UnitsQuery,
 ): Promise<{ items: Unit[]; nextCursor: string | null }> {
   if (query.dockId) requireAtDock(ctx, 'unit.read', query.dockId, 'dockId');
+  const after = query.cursor === undefined ? null : readCursor(unitPlace, query.cursor);
+  if (query.cursor !== undefined && !after) throw refuseField('cursor', 'is none that a list answered');
   const rows = await listUnitRows(ctx.db, query.dockId ? [query.dockId] : visibleDocks(ctx.actor));
-  return { items: rows.map(toUnit), nextCursor: null };
+  const rest = rows
+    .sort((a, b) => compare(placeOf(a), placeOf(b)))
+    .filter((row) => !after || compare(placeOf(row), after) > 0);
+  const items = rest.slice(0, query.limit ?? rest.length).map(toUnit);
+  const last = items.length < rest.length ? items.at(-1) : undefined;
+  return { items, nextCursor: last ? writeCursor({ fleetNumber: last.fleetNumber, id: last.id }) : null };
+}
+
+function placeOf(row: UnitRow): Place {
+  return { fleetNumber: row.fleet_number, id: row.id };
+}
+
+function compare(a: Place, b: Place): number {
+  return natural.compare(a.fleetNumber, b.fleetNumber) || (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
 }

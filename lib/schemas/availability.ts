@@ -5,7 +5,12 @@ export const availabilityQuery = z.object({
   dockId: id.optional(),
   on: day.optional(),
   /** The planned outing in hours. */
-  hours: z.coerce.number('give hours as a number').pipe(hours).optional(),
+  hours: z
+    .string('give hours as a number')
+    .regex(/^-?\d+(\.\d+)?$/, 'give hours as a number')
+    .transform(Number)
+    .pipe(hours)
+    .optional(),
 });
 
 export const hold = z.object({

@@ -32,6 +32,9 @@ export const changeUnit = z
 
 export const unitsQuery = z.object({ dockId: id.optional(), ...pageQuery });
 
+/** Where a page of units ended. */
+export const unitPlace = z.object({ fleetNumber: z.string(), id: z.uuid() });
+
 export const unit = z.object({
   id,
   fleetNumber: z.string(),
@@ -51,4 +54,5 @@ export const unit = z.object({
 
 export type CreateUnit = z.output<typeof createUnit>;
 export type ChangeUnit = z.output<typeof changeUnit>;
+export type UnitsQuery = z.output<typeof unitsQuery>;
 export type Unit = z.output<typeof unit>;

@@ -5,20 +5,27 @@ import type { AddressInfo } from 'node:net';
 import path from 'node:path';
 import { afterAll, beforeAll } from 'vitest';
 import { getDatabase } from '@/db/client';
+import { signSessionToken } from '@/lib/auth/session-token';
 import type { Role } from '@/lib/domain/access';
 
 type Handler = (request: Request, route: { params: Promise<Record<string, string>> }) => Promise<Response>;
 type Route = { pattern: RegExp; names: string[]; file: string };
 
-export type Answer<T = Record<string, unknown>> = { status: number; body: T };
+export type Answer<T = Record<string, unknown>> = { status: number; type: string; body: T };
 /** A person who calls `/api/v1`; paths begin after that. `body` that is a string is sent as it is. */
 export type Caller = {
   personId: string;
   key: string;
   name: string;
-  send: <T = Record<string, unknown>>(method: string, path: string, body?: unknown) => Promise<Answer<T>>;
+  send: <T = Record<string, unknown>>(
+    method: string,
+    path: string,
+    body?: unknown,
+    headers?: Record<string, string>,
+  ) => Promise<Answer<T>>;
 };
 
+const SECRET = 'tests-only: qX3vN8rLw2Zt6KdYp0Hs5Bf';
 const ROOT = path.join(process.cwd(), 'app/api/v1');
 
 function listRoutes(): Route[] {
@@ -57,10 +64,12 @@ async function answer(routes: Route[], incoming: IncomingMessage, outgoing: Serv
 
 /**
  * Serves the API's routes over HTTP on the test file's database, without the pages and so without a build.
- * `caller()` adds a person with an API key.
+ * `caller()` adds a person with an API key, who calls with it, or when `signedIn` with a session's cookie;
+ * `nobody` calls without either.
  */
 export function testApi(database: { url: string }): {
-  caller(role: Role, options?: { dockIds?: string[]; name?: string }): Promise<Caller>;
+  caller(role: Role, options?: { dockIds?: string[]; name?: string; signedIn?: boolean }): Promise<Caller>;
+  nobody: Pick<Caller, 'send'>;
 } {
   const routes = listRoutes();
   const server = createServer((incoming, outgoing) => {
@@ -74,7 +83,7 @@ export function testApi(database: { url: string }): {
       DATABASE_URL: database.url,
       SMTP_URL: 'smtp://127.0.0.1:9',
       PUBLIC_URL: baseUrl,
-      AUTH_SECRET: 'tests-only: qX3vN8rLw2Zt6KdYp0Hs5Bf',
+      AUTH_SECRET: SECRET,
     });
   });
   afterAll(async () => {
@@ -82,19 +91,24 @@ export function testApi(database: { url: string }): {
     await getDatabase().destroy();
   });
 
+  const sendAs =
+    (identity: Record<string, string>): Caller['send'] =>
+    async (method, to, body, headers = {}) => {
+      const response = await fetch(`${baseUrl}/api/v1${to}`, {
+        method,
+        headers: { 'content-type': 'application/json', ...identity, ...headers },
+        ...(body !== undefined && { body: typeof body === 'string' ? body : JSON.stringify(body) }),
+      });
+      const text = await response.text();
+      const type = response.headers.get('content-type') ?? '';
+      return { status: response.status, type, body: text && type.includes('json') ? JSON.parse(text) : null };
+    };
   return {
-    caller: async (role, { dockIds = [], name = role } = {}) => {
+    nobody: { send: sendAs({}) },
+    caller: async (role, { dockIds = [], name = role, signedIn = false } = {}) => {
       const { personId, key } = await addPerson(role, dockIds, name);
-      const send: Caller['send'] = async (method, to, body) => {
-        const response = await fetch(`${baseUrl}/api/v1${to}`, {
-          method,
-          headers: { authorization: `Bearer ${key}`, 'content-type': 'application/json' },
-          ...(body !== undefined && { body: typeof body === 'string' ? body : JSON.stringify(body) }),
-        });
-        const text = await response.text();
-        return { status: response.status, body: text ? JSON.parse(text) : null };
-      };
-      return { personId, key, name, send };
+      if (signedIn) return { personId, key, name, send: sendAs({ cookie: await signInHere(personId) }) };
+      return { personId, key, name, send: sendAs({ authorization: `Bearer ${key}` }) };
     },
   };
 }
@@ -116,4 +130,21 @@ async function addPerson(role: Role, dockIds: string[], name: string) {
     })
     .execute();
   return { personId: id, key };
+}
+
+/** Begins a session for the person and answers the cookie that a browser would send. */
+async function signInHere(personId: string): Promise<string> {
+  const expires = new Date(Date.now() + 3_600_000);
+  const { session_version } = await getDatabase()
+    .selectFrom('person')
+    .select('session_version')
+    .where('id', '=', personId)
+    .executeTakeFirstOrThrow();
+  const { id } = await getDatabase()
+    .insertInto('session')
+    .values({ person_id: personId, session_version, expires_at: expires })
+    .returning('id')
+    .executeTakeFirstOrThrow();
+  const token = { sessionId: id, expiresAtSeconds: Math.floor(expires.getTime() / 1000) };
+  return `next-auth.session-token=${signSessionToken(token, SECRET)}`;
 }
