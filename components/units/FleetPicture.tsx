@@ -11,6 +11,7 @@ export function toWaterline(unit: FleetUnit): WaterlineUnit | null {
     href: `/units/${unit.id}`,
     tenthsToHold: unit.hoursToHold === null ? null : Math.round(unit.hoursToHold * 10),
     daysToHold: unit.daysToHold,
+    outingsToHold: unit.outingsToHold,
     state: unit.state,
   };
 }

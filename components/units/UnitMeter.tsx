@@ -37,7 +37,7 @@ export function UnitMeter({ page }: { page: UnitPage }) {
           <h2 className="text-xl">Before its next hold</h2>
           <p>
             {roomLines(unit).join(', ') || 'No rule holds this unit next.'}
-            {unit.holdingRuleName ? `: ${unit.holdingRuleName}` : null}
+            {unit.holdingRuleName ? `. What comes first: ${unit.holdingRuleName}.` : null}
           </p>
           <Waterline unit={floating} />
         </div>

@@ -80,8 +80,14 @@ function Left({ unit }: { unit: FleetUnit }) {
   if (lines.length === 0) return <span className="text-ink-soft">No hold ahead</span>;
   return (
     <div>
-      <p className="numerals">{lines.join(', ')}</p>
-      {unit.holdingRuleName ? <p className="text-sm text-ink-soft">{unit.holdingRuleName}</p> : null}
+      <ul className="numerals">
+        {lines.map((line) => (
+          <li key={line} className="whitespace-nowrap">
+            {line}
+          </li>
+        ))}
+      </ul>
+      {unit.holdingRuleName ? <p className="text-sm text-ink-soft">First: {unit.holdingRuleName}</p> : null}
     </div>
   );
 }

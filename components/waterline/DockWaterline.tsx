@@ -1,6 +1,14 @@
 import Link from 'next/link';
 import { cx } from '@/components/ui/cx';
-import { chooseScale, distanceFromTop, placeUnit, ticksOf, type Scale, type WaterlineUnit } from './geometry';
+import {
+  chooseScale,
+  distanceFromTop,
+  governingLimit,
+  placeUnit,
+  ticksOf,
+  type Scale,
+  type WaterlineUnit,
+} from './geometry';
 import { Hull, hullHeight, hullWidth } from './Hull';
 import { limitText, shortAmount } from './text';
 import { stateWords } from '@/components/state/state-words';
@@ -14,6 +22,7 @@ const top = (height: number) => `${distanceFromTop(height, 100)}%`;
  */
 export function DockWaterline({ units, label }: { units: WaterlineUnit[]; label: string }) {
   const scale = chooseScale(units);
+  const byOutings = units.some((unit) => governingLimit(unit)?.by === 'outings');
   const longest = Math.max(0, ...units.map((unit) => unit.fleetNumber.length));
   return (
     <figure>
@@ -21,7 +30,7 @@ export function DockWaterline({ units, label }: { units: WaterlineUnit[]; label:
         <span className="font-semibold text-ink">{label}</span>
         <span>
           One step is <Step scale={scale} />. Above the line: left before the next hold. Below: past it. A
-          pennant is out, a crossbar is held.
+          pennant is out, a crossbar is held{byOutings ? ', × counts outings' : ''}.
         </span>
       </figcaption>
       <ul

@@ -1,7 +1,7 @@
 import { cx } from '@/components/ui/cx';
 import { chooseScale, distanceFromTop, placeUnit, ticksOf, type WaterlineUnit } from './geometry';
 import { Hull, hullHeight, hullWidth } from './Hull';
-import { shortAmount, unitText } from './text';
+import { fullAmount, unitText } from './text';
 
 const magnify = 2.6;
 const top = (height: number) => `${distanceFromTop(height, 100)}%`;
@@ -73,7 +73,7 @@ export function Waterline({ unit, tall = false }: { unit: WaterlineUnit; tall?: 
                 afloat ? 'fill-ink stroke-paper' : 'fill-held stroke-shoal',
               )}
             >
-              {limit ? shortAmount(unit) : 'no hold ahead'}
+              {limit ? fullAmount(unit) : 'no hold ahead'}
             </text>
           </svg>
         </svg>

@@ -9,6 +9,8 @@ export type WaterlineUnit = {
   tenthsToHold: number | null;
   /** Days left before the next hold; negative when past it; null without such a limit. */
   daysToHold: number | null;
+  /** Outings left before the next hold; negative when past it; null or left out without such a limit. */
+  outingsToHold?: number | null;
   state: UnitState;
   /** How much the unit runs in a day of the calendar, in tenths of an hour. */
   hoursPerDayTenths?: number;
@@ -31,24 +33,47 @@ const largest: Scale = { tenths: 5000, days: 300, steps: 5 };
 /** The lowest fraction drawn: the deep is half as tall as the air above the line. */
 export const deepest = -0.5;
 
-export type Governing = { by: 'hours' | 'days'; amount: number };
+export type Governing = { by: 'hours' | 'days' | 'outings'; amount: number };
 
 /**
- * Which limit comes sooner. With a rate above zero, hours are turned into days by it. Without one both are
- * taken as fractions of the scale, which treats five hours as three days. Of two alike, hours are named.
- * Null when the unit has no limit ahead.
+ * Which limit comes soonest. With a rate above zero, hours are turned into days by it. Without one hours and days
+ * are taken as fractions of the scale, which treats five hours as three days; an outing always counts as an hour at
+ * that pace. Of two alike, hours are named before days. Null when the unit has no limit ahead.
  */
 export function governingLimit(unit: WaterlineUnit): Governing | null {
-  const { tenthsToHold: tenths, daysToHold: days, hoursPerDayTenths: rate } = unit;
-  if (tenths === null) return days === null ? null : { by: 'days', amount: days };
-  if (days === null) return { by: 'hours', amount: tenths };
+  const {
+    tenthsToHold: tenths,
+    daysToHold: days,
+    outingsToHold: outings = null,
+    hoursPerDayTenths: rate,
+  } = unit;
   const tenthsADay = rate !== undefined && rate > 0 ? rate : USUAL_PACE.tenthsPerDay;
-  return tenths / tenthsADay <= days ? { by: 'hours', amount: tenths } : { by: 'days', amount: days };
+  const limits = [
+    ...(tenths === null ? [] : [{ by: 'hours', amount: tenths, inDays: tenths / tenthsADay } as const]),
+    ...(days === null ? [] : [{ by: 'days', amount: days, inDays: days } as const]),
+    ...(outings === null
+      ? []
+      : [{ by: 'outings', amount: outings, inDays: outings / USUAL_PACE.outingsPerDay } as const]),
+  ];
+  const [first, ...others] = limits;
+  if (!first) return null;
+  const { by, amount } = others.reduce<(typeof limits)[number]>(
+    (soonest, limit) => (limit.inDays < soonest.inDays ? limit : soonest),
+    first,
+  );
+  return { by, amount };
 }
 
 /** How high a unit floats on `scale`: 1 is its top, 0 the water line, negative below. Not clipped. */
 export function heightOn(scale: Scale, limit: Governing): number {
-  return limit.amount / (limit.by === 'hours' ? scale.tenths : scale.days);
+  switch (limit.by) {
+    case 'hours':
+      return limit.amount / scale.tenths;
+    case 'days':
+      return limit.amount / scale.days;
+    case 'outings':
+      return (limit.amount * 10) / scale.tenths;
+  }
 }
 
 /**

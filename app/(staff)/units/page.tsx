@@ -35,22 +35,21 @@ export default async function UnitsPage({ searchParams }: { searchParams: Promis
     );
   return (
     <>
-      <PageHeader title="Units" actions={add('Add a unit')}>
+      <PageHeader title="Units" actions={add('Add a unit')} />
+      <div className="grid gap-8">
+        <FleetPicture units={units} />
         <FleetFilters docks={docks} models={models} filter={filter} />
-      </PageHeader>
-      {units.length === 0 ? (
-        <EmptyState
-          title="No unit fits what you chose"
-          action={<LinkButton href="/units">Show all units</LinkButton>}
-        >
-          Choose another dock, model or state above.
-        </EmptyState>
-      ) : (
-        <div className="grid gap-8">
-          <FleetPicture units={units} />
+        {units.length === 0 ? (
+          <EmptyState
+            title="No unit fits what you chose"
+            action={<LinkButton href="/units">Show all units</LinkButton>}
+          >
+            Choose another dock, model or state above.
+          </EmptyState>
+        ) : (
           <UnitTable units={units} />
-        </div>
-      )}
+        )}
+      </div>
     </>
   );
 }

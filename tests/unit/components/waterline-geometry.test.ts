@@ -1,8 +1,9 @@
-import { expect, test } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import {
   chooseScale,
   distanceFromTop,
   governingLimit,
+  heightOn,
   placeUnit,
   sortLowestFirst,
   ticksOf,
@@ -104,4 +105,20 @@ test('the lowest unit comes first, alike ones by number, and those without a lim
     'free',
   ]);
   expect(units[0]?.fleetNumber).toBe('free');
+});
+
+describe('outings', () => {
+  const scaleOf50 = { tenths: 500, days: 30, steps: 5 };
+  const counted = { ...unit(229, 81), state: 'held' as const };
+
+  test('a unit whose outings are used up lies on the line, whatever hours are left', () => {
+    expect(governingLimit({ ...counted, outingsToHold: 0 })).toEqual({ by: 'outings', amount: 0 });
+    expect(placeUnit({ ...counted, outingsToHold: 0 }, scaleOf50).height).toBe(0);
+  });
+
+  test('an outing counts as an hour: five of either take three days', () => {
+    expect(governingLimit({ ...counted, outingsToHold: 22 })).toEqual({ by: 'outings', amount: 22 });
+    expect(governingLimit({ ...counted, outingsToHold: 23 })).toEqual({ by: 'hours', amount: 229 });
+    expect(heightOn(scaleOf50, { by: 'outings', amount: 25 })).toBe(0.5);
+  });
 });
