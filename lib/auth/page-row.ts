@@ -8,12 +8,16 @@ export async function pageId(params: Promise<{ id: string }>): Promise<string> {
   return parsed.success ? parsed.data.id : notFound();
 }
 
-/** What an action answers; the page does not exist for whoever may not see its row, or when there is none. */
+/**
+ * Awaits what a page cannot do without. What is not there and what one may not see are both shown as "not found",
+ * so that an address tells nobody whether there is something behind it.
+ */
 export async function orNotFound<T>(answer: Promise<T>): Promise<T> {
   try {
     return await answer;
   } catch (error) {
-    if (error instanceof Refusal && (error.code === 'not_found' || error.code === 'forbidden')) notFound();
+    if (error instanceof Refusal && ['not_found', 'forbidden', 'invalid_input'].includes(error.code))
+      notFound();
     throw error;
   }
 }

@@ -5,7 +5,7 @@ import { PageHeader } from '@/components/ui/PageHeader';
 import { SectionNav } from '@/components/ui/SectionNav';
 import { getAvailability } from '@/lib/actions/get-availability';
 import { listDocks } from '@/lib/actions/list-docks';
-import { onPage } from '@/lib/auth/on-page';
+import { orNotFound } from '@/lib/auth/page-row';
 import { pageContext } from '@/lib/auth/page';
 import { QueryFrame } from '@/lib/client/QueryFrame';
 
@@ -23,7 +23,7 @@ export default async function BoardPage({ searchParams }: { searchParams: Promis
         <EmptyState title="No dock yet">A manager adds docks under Docks.</EmptyState>
       </>
     );
-  const first = await onPage(getAvailability(ctx, { dockId: dock.id }));
+  const first = await orNotFound(getAvailability(ctx, { dockId: dock.id }));
   return (
     <>
       <PageHeader title={dock.name} kicker="Board" />

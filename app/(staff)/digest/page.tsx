@@ -3,14 +3,14 @@ import { DigestControls } from '@/components/digest/DigestControls';
 import { DigestLetter } from '@/components/digest/DigestLetter';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { previewDigest } from '@/lib/actions/preview-digest';
-import { onPage } from '@/lib/auth/on-page';
+import { orNotFound } from '@/lib/auth/page-row';
 import { pageContext } from '@/lib/auth/page';
 
 export const metadata: Metadata = { title: 'Digest' };
 
 export default async function DigestPage() {
   const ctx = await pageContext();
-  const { subject, html, wanted } = await onPage(previewDigest(ctx, {}));
+  const { subject, html, wanted } = await orNotFound(previewDigest(ctx, {}));
   return (
     <>
       <PageHeader

@@ -7,13 +7,13 @@ import { listDocks } from '@/lib/actions/list-docks';
 import { listInvitations } from '@/lib/actions/list-invitations';
 import { listPeople } from '@/lib/actions/list-people';
 import { pageContext } from '@/lib/auth/page';
-import { onPage } from '@/lib/auth/on-page';
+import { orNotFound } from '@/lib/auth/page-row';
 
 export const metadata: Metadata = { title: 'People' };
 
 export default async function PeoplePage() {
   const ctx = await pageContext();
-  const people = await onPage(listPeople(ctx));
+  const people = await orNotFound(listPeople(ctx));
   const [invitations, docks] = [await listInvitations(ctx), await listDocks(ctx)];
   return (
     <>

@@ -4,7 +4,7 @@ import { EmptyState } from '@/components/ui/EmptyState';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { listReadings } from '@/lib/actions/list-readings';
-import { onPage } from '@/lib/auth/on-page';
+import { orNotFound } from '@/lib/auth/page-row';
 import { pageContext } from '@/lib/auth/page';
 
 export const metadata: Metadata = { title: 'Review' };
@@ -12,7 +12,7 @@ export const metadata: Metadata = { title: 'Review' };
 export default async function ReviewPage({ searchParams }: { searchParams: Promise<{ cursor?: string }> }) {
   const ctx = await pageContext();
   const { cursor } = await searchParams;
-  const page = await onPage(listReadings(ctx, { review: 'open', limit: 25, cursor }));
+  const page = await orNotFound(listReadings(ctx, { review: 'open', limit: 25, cursor }));
   return (
     <>
       <PageHeader

@@ -3,7 +3,7 @@ import { notFound } from 'next/navigation';
 import { CheckIn } from '@/components/check-in/CheckIn';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getUnitReadiness } from '@/lib/actions/get-unit-readiness';
-import { onPage } from '@/lib/auth/on-page';
+import { orNotFound } from '@/lib/auth/page-row';
 import { pageContext } from '@/lib/auth/page';
 import { id } from '@/lib/schemas/common';
 
@@ -13,7 +13,7 @@ export default async function CheckInPage({ params }: { params: Promise<{ unitId
   const ctx = await pageContext();
   const unitId = id.safeParse((await params).unitId);
   if (!unitId.success) notFound();
-  const unit = await onPage(getUnitReadiness(ctx, unitId.data));
+  const unit = await orNotFound(getUnitReadiness(ctx, unitId.data));
   return (
     <>
       <PageHeader title={`Check in ${unit.fleetNumber}`} kicker={`${unit.modelName} · ${unit.dockName}`} />
