@@ -18,13 +18,36 @@ export function dueDayOf({ due }: CalendarCursor): CalendarDay | null {
   return due === null ? null : dayOfNumber(due);
 }
 
+/** A trigger's series as it begins, read once however many units it is computed for. */
+const begun = new WeakMap<CalendarTrigger, Series>();
+
+function seriesFromStart(trigger: CalendarTrigger): Series {
+  let series = begun.get(trigger);
+  if (!series) {
+    const skip = trigger.anchor === 'completed' ? 'backward' : 'omit';
+    series = seriesOf(readRule(trigger.rrule), numberOfDay(trigger.start), skip);
+    begun.set(trigger, series);
+  }
+  return series;
+}
+
+/** First occurrences that were looked for already, by the day from which on: those of many units are the same. */
+const firsts = new WeakMap<Series, Map<number, number | null>>();
+
+function firstOf(series: Series, from: number): number | null {
+  if (isPlain(series.rule)) return firstNumberFrom(series, from);
+  let known = firsts.get(series);
+  if (!known) firsts.set(series, (known = new Map()));
+  let first = known.get(from);
+  if (first === undefined) known.set(from, (first = firstNumberFrom(series, from)));
+  return first;
+}
+
 /** The first occurrence on or after both the rule's start and the day the unit entered service. */
 export function beginCalendar(trigger: CalendarTrigger, enteredServiceOn: CalendarDay): CalendarCursor {
-  const { rrule, start, anchor } = trigger;
-  const skip = anchor === 'completed' ? 'backward' : 'omit';
-  const series = seriesOf(readRule(rrule), numberOfDay(start), skip);
-  const due = firstNumberFrom(series, Math.max(series.start, numberOfDay(enteredServiceOn)));
-  return { anchor, series, due };
+  const series = seriesFromStart(trigger);
+  const due = firstOf(series, Math.max(series.start, numberOfDay(enteredServiceOn)));
+  return { anchor: trigger.anchor, series, due };
 }
 
 /**
@@ -61,5 +84,5 @@ export function closeCalendar(cursor: CalendarCursor, on: number, window: Window
   const late = on > due + window.lateDays;
   if ((early || late) && isPlain(series.rule)) return restart(cursor, on);
   if (early) return cursor;
-  return { anchor, series, due: firstNumberFrom(series, (late ? on : due) + 1) };
+  return { anchor, series, due: firstOf(series, (late ? on : due) + 1) };
 }
