@@ -80,42 +80,6 @@ function toColumns(points: readonly DuePointToStore[]) {
   };
 }
 
-/** What due points are computed from, unit by unit. */
-export type UnitFacts = Awaited<ReturnType<typeof listUnitFacts>>[number];
-
-/** Scope, entry into service and closings of these units; retired ones are left out. */
-export async function listUnitFacts(db: Kysely<DB>, unitIds: readonly string[]) {
-  return db
-    .selectFrom('unit')
-    .innerJoin('model', 'model.id', 'unit.model_id')
-    .select((eb) => [
-      'unit.id',
-      'unit.model_id as modelId',
-      'unit.dock_id as dockId',
-      'unit.entered_service_on as enteredServiceOn',
-      'model.propulsion',
-      'model.stroke',
-      'model.engines',
-      'model.cylinders',
-      sql<number>`coalesce(unit.carb_count_override, model.carb_count)`.as('carbCount'),
-      eb
-        .selectFrom('closing')
-        .whereRef('closing.unit_id', '=', 'unit.id')
-        .select(
-          sql<StoredClosing[]>`coalesce(json_agg(json_build_array(
-            closing.rule_id, closing.closed_on, closing.engine_hours_tenths, closing.outings)
-            order by closing.closed_at, closing.id), '[]')`.as('list'),
-        )
-        .as('closings'),
-    ])
-    .where('unit.id', '=', sql<string>`any(${[...unitIds]}::uuid[])`)
-    .where('unit.retired_at', 'is', null)
-    .execute();
-}
-
-/** Rule, day, engine hours in tenths, outings. */
-export type StoredClosing = [ruleId: string, closedOn: string, engineHoursTenths: number, outings: number];
-
 /**
  * Locks the assessments of these units, in order of id, so that no two refreshes of one unit interleave.
  * Answers the revision each is wanted at.
@@ -187,5 +151,17 @@ export function listLastClosings(db: Kysely<DB>, unitId: string) {
     .orderBy('rule_id')
     .orderBy('closed_at', 'desc')
     .orderBy('id', 'desc')
+    .execute();
+}
+
+/** The closings of one rule on a unit, in the order its due points are computed from. */
+export function listClosingsOf(db: Kysely<DB>, unitId: string, ruleId: string) {
+  return db
+    .selectFrom('closing')
+    .select(['closed_on', 'engine_hours_tenths', 'outings'])
+    .where('unit_id', '=', unitId)
+    .where('rule_id', '=', ruleId)
+    .orderBy('closed_at')
+    .orderBy('id')
     .execute();
 }

@@ -4,13 +4,16 @@ import type { DB, TaskTable } from '../tables';
 
 type UnitIds = readonly string[] | 'all';
 
-/** A rule that has come within its lead on a unit and has no open task. */
-export type Duty = {
+/** A rule that has come within its lead on a unit, or an open defect, for which a task is to be opened. */
+export type WorkToOpen = {
   unit_id: string;
-  rule_id: string;
-  name: string;
-  kind: 'inspection' | 'service' | 'rebuild';
-  labour: Labour;
+  kind: TaskTable['kind'];
+  title: string;
+  detail: string | null;
+  rule_id: string | null;
+  defect_id: string | null;
+  /** What the work takes; null for a defect. */
+  labour: Labour | null;
   carb_count: number;
   engines: number;
 };
@@ -23,10 +26,15 @@ const withinLead = (now: Date) => sql`(m.engine_hours_tenths >= p.upcoming_from_
   or m.outing_count >= p.upcoming_from_outings
   or (${now}::timestamptz at time zone d.time_zone)::date >= p.upcoming_from_on)`;
 
-/** The duties that have come within their rule's lead and have no open task. */
-export async function listDuties(db: Kysely<DB>, unitIds: UnitIds, now: Date): Promise<Duty[]> {
-  const { rows } = await sql<Duty>`
-    select distinct p.unit_id, p.rule_id, r.name, r.kind, r.labour,
+/**
+ * Withdraws the rules' tasks that nobody has begun, planned or written on and that are no longer within their lead;
+ * answers the duties that have come within it and have no open task, and the open defects for which no task is open
+ * or was ever closed. One statement, for it runs after every check-in.
+ */
+export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): Promise<WorkToOpen[]> {
+  const { rows } = await sql<WorkToOpen>`
+    with withdrawn as (${withdrawNoLongerDue(unitIds, now)})
+    select distinct p.unit_id, r.kind, r.name as title, null as detail, p.rule_id, null::uuid as defect_id, r.labour,
            coalesce(u.carb_count_override, o.carb_count) as carb_count, o.engines
       from due_point p
       join unit u on u.id = p.unit_id and u.retired_at is null
@@ -36,14 +44,9 @@ export async function listDuties(db: Kysely<DB>, unitIds: UnitIds, now: Date): P
       join rule r on r.id = p.rule_id and r.ended_at is null
      where ${among('p.unit_id', unitIds)} and ${withinLead(now)}
        and not exists (select 1 from task t
-         where t.unit_id = p.unit_id and t.rule_id = p.rule_id and t.ended_at is null)`.execute(db);
-  return rows;
-}
-
-/** Open defects for which no task is open or was ever closed. */
-export async function listDefectsWithoutTask(db: Kysely<DB>, unitIds: UnitIds) {
-  const { rows } = await sql<{ id: string; unit_id: string; title: string; detail: string | null }>`
-    select f.id, f.unit_id, f.title, f.detail
+         where t.unit_id = p.unit_id and t.rule_id = p.rule_id and t.ended_at is null)
+    union all
+    select f.unit_id, 'repair', f.title, f.detail, null, f.id, null, 0, 0
       from defect f
       join unit u on u.id = f.unit_id and u.retired_at is null
      where f.cleared_at is null and ${among('f.unit_id', unitIds)}
@@ -61,9 +64,7 @@ export async function insertTasks(db: Kysely<DB>, rows: Insertable<TaskTable>[])
       .execute();
 }
 
-/** Withdraws the rules' tasks that nobody has begun, planned or written on, and that are no longer within their lead. */
-export async function withdrawTasksNoLongerDue(db: Kysely<DB>, unitIds: UnitIds, now: Date): Promise<void> {
-  await sql`
+const withdrawNoLongerDue = (unitIds: UnitIds, now: Date) => sql`
     update task t set ended_at = ${now}, withdraw_reason = 'No longer due.', revision = t.revision + 1
      where t.ended_at is null and t.origin = 'rule' and t.started_at is null and t.planned_on is null
        and ${among('t.unit_id', unitIds)}
@@ -74,5 +75,4 @@ export async function withdrawTasksNoLongerDue(db: Kysely<DB>, unitIds: UnitIds,
            join dock d on d.id = u.dock_id
            join live_meter m on m.unit_id = u.id
            join rule r on r.id = p.rule_id and r.ended_at is null
-          where p.unit_id = t.unit_id and p.rule_id = t.rule_id and ${withinLead(now)})`.execute(db);
-}
+          where p.unit_id = t.unit_id and p.rule_id = t.rule_id and ${withinLead(now)})`;

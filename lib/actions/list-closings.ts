@@ -1,4 +1,4 @@
-import { listUnitFacts } from '@/db/queries/due-points';
+import { listClosingsOf } from '@/db/queries/due-points';
 import type { Context } from '@/lib/context';
 import type { ClosingShape } from '@/lib/schemas/closing';
 import { toHours } from '@/lib/schemas/schedule-shape';
@@ -14,8 +14,10 @@ export async function listClosings(
   { ruleId }: { ruleId: string },
 ): Promise<ClosingShape[]> {
   const unit = await accessUnit(ctx, unitId, 'unit.read');
-  const [facts] = await listUnitFacts(ctx.db, [unit.id]);
-  return (facts?.closings ?? [])
-    .filter(([id]) => id === ruleId)
-    .map(([, on, engineHoursTenths, outings]) => ({ on, engineHours: toHours(engineHoursTenths), outings }));
+  const closings = await listClosingsOf(ctx.db, unit.id, ruleId);
+  return closings.map(({ closed_on: on, engine_hours_tenths: tenths, outings }) => ({
+    on,
+    engineHours: toHours(tenths),
+    outings,
+  }));
 }

@@ -1,9 +1,4 @@
-import {
-  listDuties,
-  listDefectsWithoutTask,
-  insertTasks,
-  withdrawTasksNoLongerDue,
-} from '@/db/queries/duties';
+import { insertTasks, settleTasks } from '@/db/queries/duties';
 import type { Context } from '@/lib/context';
 import { computeMinutes } from '@/lib/domain/rule';
 
@@ -14,27 +9,14 @@ import { computeMinutes } from '@/lib/domain/rule';
  */
 export async function openTasks(ctx: Context, unitIds: readonly string[] | 'all'): Promise<void> {
   const { db, now } = ctx;
-  await withdrawTasksNoLongerDue(db, unitIds, now);
-  const duties = await listDuties(db, unitIds, now);
-  const defects = await listDefectsWithoutTask(db, unitIds);
-  await insertTasks(db, [
-    ...duties.map((duty) => ({
-      unit_id: duty.unit_id,
-      kind: duty.kind,
-      title: duty.name,
-      origin: 'rule' as const,
-      rule_id: duty.rule_id,
-      expected_minutes: computeMinutes(duty.labour, { carbCount: duty.carb_count, engines: duty.engines }),
+  const work = await settleTasks(db, unitIds, now);
+  await insertTasks(
+    db,
+    work.map(({ labour, carb_count: carbCount, engines, ...task }) => ({
+      ...task,
+      origin: labour ? ('rule' as const) : ('defect' as const),
+      expected_minutes: labour && computeMinutes(labour, { carbCount, engines }),
       opened_at: now,
     })),
-    ...defects.map((defect) => ({
-      unit_id: defect.unit_id,
-      kind: 'repair' as const,
-      title: defect.title,
-      detail: defect.detail,
-      origin: 'defect' as const,
-      defect_id: defect.id,
-      opened_at: now,
-    })),
-  ]);
+  );
 }
