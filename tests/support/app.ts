@@ -8,6 +8,8 @@ import { childEnv, untilAnswers } from '@/lib/launch/services';
 export interface App {
   baseUrl: string;
   env: Env;
+  /** Process id of the web server. */
+  webPid: number;
   worker: WorkerProcess;
   /** All that both processes printed, for when a test fails. */
   output(): string;
@@ -15,6 +17,8 @@ export interface App {
 }
 
 export interface WorkerProcess {
+  /** Process id, while it runs. */
+  pid(): number | undefined;
   start(): void;
   /** Asks it to end, and waits. */
   stop(): Promise<void>;
@@ -68,12 +72,13 @@ export async function startApp(options: AppOptions): Promise<App> {
     await stop();
     throw error;
   });
-  return { baseUrl: env.PUBLIC_URL, env, worker, output: () => lines.join('\n'), stop };
+  return { baseUrl: env.PUBLIC_URL, env, webPid: web.pid, worker, output: () => lines.join('\n'), stop };
 }
 
 function workerProcess(spawn: () => Child): WorkerProcess {
   let running: Child | undefined;
   return {
+    pid: () => running?.pid,
     start: () => {
       running ??= spawn();
     },
