@@ -15,7 +15,7 @@ import { describeDay } from '@/lib/domain/words';
 import { refuseField } from '@/lib/errors';
 import type { CloseTask, Closure } from '@/lib/schemas/task';
 import { accessTask } from './access';
-import { enqueueRefresh } from './assess-again';
+import { assessAgain, enqueueRefresh } from './assess-again';
 import { computeClosingMeter, type ClosingMeter } from './closing-meter';
 import { settleInstant } from './keep-reading';
 import { refuseEnded } from './refuse-ended';
@@ -61,7 +61,7 @@ export async function closeTask(ctx: Context, id: string, input: CloseTask): Pro
     await updateTask(trx, id, { ended_at: ctx.now });
     if (task.defect_id)
       await clearDefect(trx, task.defect_id, { at, by, note: input.note || `Closed: ${task.title}.` });
-    await enqueueRefresh(trx, [task.unit_id]);
+    await (task.rule_id ? assessAgain : enqueueRefresh)(trx, [task.unit_id]);
     return closure.id;
   });
   return toClosure(await getClosure(ctx.db, closureId));
