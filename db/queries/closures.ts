@@ -23,14 +23,6 @@ export function getClosure(db: Kysely<DB>, id: string) {
   return selectClosures(db).where('closure.id', '=', id).executeTakeFirstOrThrow();
 }
 
-/** The closure of a task that is not reversed. */
-export function findClosureOfTask(db: Kysely<DB>, taskId: string) {
-  return selectClosures(db)
-    .where('closure.task_id', '=', taskId)
-    .where('closure.reversed_at', 'is', null)
-    .executeTakeFirst();
-}
-
 /** The closures of a task and, where it has a rule, of that rule on the unit: the latest first, reversed ones too. */
 export function listClosures(db: Kysely<DB>, task: { id: string; unit_id: string; rule_id: string | null }) {
   return selectClosures(db)

@@ -11,10 +11,6 @@ export function listOpenInvitations(db: Kysely<DB>): Promise<InvitationRow[]> {
     .execute();
 }
 
-export function findOpenInvitation(db: Kysely<DB>, id: string): Promise<InvitationRow | undefined> {
-  return open(db).where('id', '=', id).executeTakeFirst();
-}
-
 /** The open invitation of this token's hash that has not expired. */
 export function findInvitationByToken(
   db: Kysely<DB>,

@@ -75,11 +75,6 @@ export function computePointStanding(point: DuePoint, standing: Standing): Point
   }
 }
 
-/** The state of a duty: the worst of its due points; clear when it has none. */
-export function computeDutyState(points: readonly DuePoint[], standing: Standing): DueState {
-  return computeWorstState(points.map((point) => computeState(point, standing)));
-}
-
 /** The day a duty is due by the calendar: the earliest of its calendar points, null when it has none. */
 export function findDueDay(points: readonly DuePoint[]): CalendarDay | null {
   return points.reduce<CalendarDay | null>(

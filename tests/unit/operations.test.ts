@@ -16,9 +16,9 @@ async function exportedVerbs(): Promise<Map<string, Handler>> {
   );
   const verbs = new Map<string, Handler>();
   for (const file of files) {
-    const module = (await import(/* @vite-ignore */ path.join(ROOT, file))) as Record<string, Handler>;
+    const routes = (await import(/* @vite-ignore */ path.join(ROOT, file))) as Record<string, Handler>;
     const at = `/${path.dirname(file)}`.replaceAll('[', '{').replaceAll(']', '}');
-    for (const verb of VERBS) if (module[verb]) verbs.set(`${verb} ${at}`, module[verb]);
+    for (const verb of VERBS) if (routes[verb]) verbs.set(`${verb} ${at}`, routes[verb]);
   }
   return verbs;
 }
