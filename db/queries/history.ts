@@ -1,11 +1,20 @@
 import { sql, type Kysely, type RawBuilder } from 'kysely';
 import type { DB } from '../tables';
 
-/** One entry of a unit's history. `place` is its instant to the microsecond, `facts` what its kind says of it. */
-export type HistoryRow = { kind: string; id: string; place: string; facts: Record<string, unknown> };
+/**
+ * One entry of a unit's history. `place` is its instant to the microsecond, `rank` orders those of one instant (the
+ * higher is the later), `facts` what its kind says of it.
+ */
+export type HistoryRow = {
+  kind: string;
+  rank: number;
+  id: string;
+  place: string;
+  facts: Record<string, unknown>;
+};
 
 /** Where a page goes on: after this entry. */
-type After = { at: string; id: string } | null;
+type After = { at: string; rank: number; id: string } | null;
 
 const text = (instant: RawBuilder<unknown>) =>
   sql`to_char(${instant} at time zone 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS.US"Z"')`;
@@ -29,15 +38,18 @@ export async function listHistory(
 ): Promise<HistoryRow[]> {
   const { kind, after, limit } = asked;
   const branches = Object.entries(BRANCHES).filter(([name]) => kind === null || name === kind);
-  const goesOn = after ? sql`(at, id) < (${after.at}::timestamptz, ${after.id}::uuid)` : sql`true`;
+  const goesOn = after
+    ? sql`(at, rank, id) < (${after.at}::timestamptz, ${after.rank}::int, ${after.id}::uuid)`
+    : sql`true`;
   const pages = branches.map(
     ([name, from]) => sql`
-      (select ${sql.lit(name)} as kind, id, at, facts from (${from(unitId, kind !== null)}) e
-        where ${goesOn} order by at desc, id desc limit ${limit})`,
+      (select * from (select ${sql.lit(name)} as kind, ${sql.lit(RANKED.indexOf(name))} as rank, id, at, facts
+                         from (${from(unitId, kind !== null)}) e) ranked
+        where ${goesOn} order by at desc, rank desc, id desc limit ${limit})`,
   );
   const { rows } = await sql<HistoryRow>`
-    select kind, id, ${text(sql`at`)} as place, facts from (${sql.join(pages, sql` union all `)}) every
-     order by at desc, id desc limit ${limit}`.execute(db);
+    select kind, rank, id, ${text(sql`at`)} as place, facts from (${sql.join(pages, sql` union all `)}) every
+     order by at desc, rank desc, id desc limit ${limit}`.execute(db);
   return rows;
 }
 
@@ -115,11 +127,13 @@ const layUps: Branch = (unitId) => sql`
            'recordedBy', ${nameOf('l.recorded_by')}, 'endedAt', ${text(sql`l.ended_at`)}) as facts
     from lay_up l where l.unit_id = ${unitId}`;
 
+/** In the order of what happens at one instant: a meter is swapped, then read, then the outing has ended. */
 const BRANCHES: Record<string, Branch> = {
-  outing: outings,
-  reading: readings,
   meter_swap: meterSwaps,
+  reading: readings,
+  outing: outings,
   closure: closures,
   defect: defects,
   lay_up: layUps,
 };
+const RANKED = Object.keys(BRANCHES);

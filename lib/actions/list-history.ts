@@ -26,5 +26,5 @@ export async function listHistory(
     .slice(0, limit)
     .map(({ kind, id, place, facts }) => ({ kind, id, at: place, ...facts }) as HistoryEntry);
   const last = rows.length > limit ? rows[limit - 1] : undefined;
-  return { items, nextCursor: last ? writeCursor({ at: last.place, id: last.id }) : null };
+  return { items, nextCursor: last ? writeCursor({ at: last.place, rank: last.rank, id: last.id }) : null };
 }

@@ -13,6 +13,7 @@ export const historyQuery = z.object({
 /** Where a page of a history ended: instants to the microsecond, as the database keeps them. */
 export const historyPlace = z.object({
   at: z.string().regex(/^\d{4,6}-\d\d-\d\dT\d\d:\d\d:\d\d\.\d{6}Z$/),
+  rank: z.int().min(0).max(9),
   id: z.uuid(),
 });
 
