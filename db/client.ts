@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { Kysely, PostgresDialect } from 'kysely';
 import pg from 'pg';
 import { env } from '@/lib/env';
@@ -63,9 +64,31 @@ export function createPool(options: DatabaseOptions, config: pg.PoolConfig = {})
   return pool;
 }
 
+/** What a statement holds to be planned once a connection and not each time: for those of every check-in. */
+const PREPARED = '/* prepared */';
+
+/** Gives each statement of this connection that is to be prepared a name, under which the server keeps its plan. */
+function prepareMarked(client: pg.PoolClient): void {
+  const names = new Map<string, string>();
+  const nameOf = (text: string) => {
+    let name = names.get(text);
+    if (!name) names.set(text, (name = createHash('sha256').update(text).digest('hex').slice(0, 40)));
+    return name;
+  };
+  const query = client.query.bind(client) as (...given: unknown[]) => unknown;
+  client.query = ((...given: unknown[]) => {
+    const [text, values] = given;
+    return typeof text === 'string' && text.includes(PREPARED)
+      ? query({ name: nameOf(text), text, values })
+      : query(...given);
+  }) as typeof client.query;
+}
+
 /** A pool as of createPool behind Kysely, with our readings of days and whole numbers. `destroy()` it. */
 export function createDatabase(options: DatabaseOptions): Kysely<DB> {
-  return new Kysely<DB>({ dialect: new PostgresDialect({ pool: createPool(options, { types }) }) });
+  const pool = createPool(options, { types });
+  pool.on('connect', prepareMarked);
+  return new Kysely<DB>({ dialect: new PostgresDialect({ pool }) });
 }
 
 const holder = globalThis as typeof globalThis & { wakewrightDatabase?: Kysely<DB> };

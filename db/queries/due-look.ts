@@ -52,7 +52,7 @@ export async function lookAtDuePoints(
     )
     select (select coalesce(json_agg(l), '[]') from looked l) as units,
            (select coalesce(json_agg(json_build_object('id', id, 'scope', scope, 'triggers', triggers, 'lead', lead,
-              'tolerance', tolerance) order by id), '[]') from rule where ended_at is null) as rules`.execute(
+              'tolerance', tolerance) order by id), '[]') from rule where ended_at is null) as rules /* prepared */`.execute(
     db,
   );
   return rows[0]!;

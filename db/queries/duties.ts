@@ -50,7 +50,7 @@ export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): 
       from defect f
       join unit u on u.id = f.unit_id and u.retired_at is null
      where f.cleared_at is null and ${among('f.unit_id', unitIds)}
-       and not exists (select 1 from task t where t.defect_id = f.id)`.execute(db);
+       and not exists (select 1 from task t where t.defect_id = f.id) /* prepared */`.execute(db);
   return rows;
 }
 

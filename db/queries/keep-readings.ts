@@ -74,7 +74,7 @@ export async function keepReadings(db: Kysely<DB>, kept: ReadingsToKeep): Promis
         from moved`
         : sql`select 1`
     })
-    select ${kept.job} from moved`.execute(db);
+    select ${kept.job} from moved /* prepared */`.execute(db);
   return rows.length === 1;
 }
 

@@ -57,6 +57,6 @@ export async function findMeterFacts(
          order by r.taken_at, r.engine_hours_tenths limit 1) next on true
       left join outing o on o.unit_id = u.id and o.ended_at is null and o.voided_at is null
       left join reading kept on kept.id = ${readingId}
-     where u.id = ${unitId}`.execute(db);
+     where u.id = ${unitId} /* prepared */`.execute(db);
   return rows[0];
 }

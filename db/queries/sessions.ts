@@ -1,4 +1,4 @@
-import type { Kysely } from 'kysely';
+import { sql, type Kysely } from 'kysely';
 import type { DB } from '../tables';
 import type { SignedInRow } from './people';
 
@@ -20,6 +20,7 @@ export function findPersonBySession(
     .where('session.ended_at', 'is', null)
     .where('session.expires_at', '>', now)
     .where('person.deactivated_at', 'is', null)
+    .modifyEnd(sql`/* prepared */`)
     .executeTakeFirst();
 }
 
