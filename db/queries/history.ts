@@ -87,19 +87,19 @@ const readings: Branch = (unitId, alone) =>
          and (${alone} or r.outing_id is null or r.voided_at is not null)`,
   );
 
+/** Both readings of a swap are void or neither is; each way has an index. */
 const meterSwaps: Branch = (unitId) =>
-  bothWays(
-    'r.voided_at',
-    (condition) => sql`
+  sql`${swapsThat(sql`is null`, unitId)} union all ${swapsThat(sql`is not null`, unitId)}`;
+
+const swapsThat = (voided: RawBuilder<unknown>, unitId: string) => sql`
       select r.id, r.taken_at as at, json_build_object(
                'engineHours', r.engine_hours_tenths / 10.0, 'oldFinal', r.shown_tenths / 10.0,
                'newFirst', (select n.shown_tenths / 10.0 from reading n
                              where n.unit_id = r.unit_id and n.taken_at = r.taken_at and n.source = 'swap_first'
-                               and (n.voided_at is null) = (r.voided_at is null) limit 1),
+                               and n.voided_at ${voided} limit 1),
                'recordedBy', ${nameOf('r.recorded_by')}, ${voidedOf('r')}) as facts
         from reading r
-       where r.unit_id = ${unitId} and ${condition} and r.source = 'swap_final'`,
-  );
+       where r.unit_id = ${unitId} and r.voided_at ${voided} and r.source = 'swap_final'`;
 
 const closures: Branch = (unitId) =>
   bothWays(

@@ -2,12 +2,13 @@ import { sql, type Kysely } from 'kysely';
 import type { DB } from '@/db/tables';
 import type { Lead, Trigger, Window } from '@/lib/domain/rule';
 
-export const UNITS = 2_000;
-export const OUTINGS_PER_UNIT = 500;
+/** How many units, and how many outings with a reading each unit has. */
+export type FleetSize = { units: number; outingsEach: number };
+const WHOLE: FleetSize = { units: 2_000, outingsEach: 500 };
 /** Tenths of an engine hour an outing takes: an hour. */
 const TENTHS_PER_OUTING = 10;
 /** The last reading of every unit is this old, so that check-ins have past instants of their own to go to. */
-export const QUIET_DAYS = 60;
+const QUIET_DAYS = 60;
 
 const hours = (every: number, anchor: Trigger['anchor'] = 'scheduled'): Trigger => ({
   on: 'engine_hours',
@@ -56,17 +57,17 @@ const WINDOW: Window = {
  * 2,000 units at three docks under 12 rules, a million outings each with its reading, and each rule done twice on
  * each unit: by set-based SQL, the same every time. Due points are not computed yet.
  */
-export async function fillFleet(pool: Kysely<DB>, now: Date): Promise<void> {
+export async function fillFleet(pool: Kysely<DB>, now: Date, size: FleetSize = WHOLE): Promise<void> {
   await pool.connection().execute(async (db) => {
     // Rows made from each other need no check of their references, which would take minutes.
     await sql`set session_replication_role = replica`.execute(db);
-    await fill(db, now);
+    await fill(db, now, size);
     await sql`reset session_replication_role`.execute(db);
   });
   await sql`vacuum analyze`.execute(pool);
 }
 
-async function fill(db: Kysely<DB>, now: Date): Promise<void> {
+async function fill(db: Kysely<DB>, now: Date, size: FleetSize): Promise<void> {
   const last = new Date(now.getTime() - QUIET_DAYS * 86_400_000);
   await sql`insert into operator (name) values ('Bench')`.execute(db);
   await sql`insert into dock (name, time_zone) values
@@ -76,33 +77,33 @@ async function fill(db: Kysely<DB>, now: Date): Promise<void> {
       from generate_series(1, 5) n`.execute(db);
   await sql`insert into person (email, name, role) values ('dock@bench.example', 'Dock', 'dock'),
     ('manager@bench.example', 'Manager', 'manager')`.execute(db);
-  await addUnits(db, last);
-  await addHistory(db, last);
+  await addUnits(db, last, size);
+  await addHistory(db, last, size);
   await addRules(db);
-  await addClosings(db, last);
+  await addClosings(db, last, size);
 }
 
-async function addUnits(db: Kysely<DB>, last: Date): Promise<void> {
+async function addUnits(db: Kysely<DB>, last: Date, size: FleetSize): Promise<void> {
   await sql`
     with docks as (select id, row_number() over (order by name) - 1 as place from dock),
     models as (select id, row_number() over (order by name) - 1 as place from model)
     insert into unit (fleet_number, model_id, dock_id, entered_service_on)
     select 'B-' || lpad(n::text, 4, '0'), m.id, d.id, '2024-03-15'
-      from generate_series(1, ${UNITS}::int) n
+      from generate_series(1, ${size.units}::int) n
       join docks d on d.place = n % 3 join models m on m.place = n % 5`.execute(db);
-  const ran = OUTINGS_PER_UNIT * TENTHS_PER_OUTING;
+  const ran = size.outingsEach * TENTHS_PER_OUTING;
   await sql`insert into live_meter (unit_id, read_at, base_tenths, shown_tenths, engine_hours_tenths, outing_count)
-    select id, ${last}, 0, ${ran}, ${ran}, ${OUTINGS_PER_UNIT} from unit`.execute(db);
+    select id, ${last}, 0, ${ran}, ${ran}, ${size.outingsEach} from unit`.execute(db);
   await sql`insert into assessment (unit_id) select id from unit`.execute(db);
 }
 
 /** An outing every 30 hours up to the last, each ended by a reading of an hour more. */
-async function addHistory(db: Kysely<DB>, last: Date): Promise<void> {
+async function addHistory(db: Kysely<DB>, last: Date, size: FleetSize): Promise<void> {
   await sql`insert into outing (id, unit_id, dock_id, started_at, ended_at)
     select gen_random_uuid(), u.id, u.dock_id, t - interval '65 minutes', t
-      from generate_series(1, ${OUTINGS_PER_UNIT}::int) n
+      from generate_series(1, ${size.outingsEach}::int) n
       cross join unit u
-      cross join lateral (select ${last}::timestamptz - (${OUTINGS_PER_UNIT}::int - n) * interval '30 hours' as t) i`.execute(
+      cross join lateral (select ${last}::timestamptz - (${size.outingsEach}::int - n) * interval '30 hours' as t) i`.execute(
     db,
   );
   await sql`insert into reading (unit_id, taken_at, shown_tenths, base_tenths, source, outing_id, recorded_at)
@@ -131,7 +132,7 @@ async function addRules(db: Kysely<DB>): Promise<void> {
 }
 
 /** Done one and two intervals ago, spread so that a few duties in a hundred are overdue now. */
-async function addClosings(db: Kysely<DB>, last: Date): Promise<void> {
+async function addClosings(db: Kysely<DB>, last: Date, size: FleetSize): Promise<void> {
   const spread = JSON.stringify(Object.fromEntries(RULES.map(({ name, days }) => [name, days])));
   await sql`
     with done as (
@@ -146,10 +147,10 @@ async function addClosings(db: Kysely<DB>, last: Date): Promise<void> {
     )
     insert into closure (task_id, unit_id, rule_id, closed_at, closed_on, engine_hours_tenths, outings, minutes)
     select task_id, unit_id, rule_id, at, at::date,
-           ${OUTINGS_PER_UNIT * TENTHS_PER_OUTING}::int - ran * ${TENTHS_PER_OUTING}::int,
-           ${OUTINGS_PER_UNIT}::int - ran, 45
+           ${size.outingsEach * TENTHS_PER_OUTING}::int - ran * ${TENTHS_PER_OUTING}::int,
+           ${size.outingsEach}::int - ran, 45
       from done
       cross join lateral (
-        select least(${OUTINGS_PER_UNIT}::int, greatest(0,
+        select least(${size.outingsEach}::int, greatest(0,
           ceil(extract(epoch from ${last}::timestamptz - at) / 108000)))::int as ran) o`.execute(db);
 }
