@@ -32,7 +32,7 @@ export async function lookAtDuePoints(
   unitIds: readonly string[],
 ): Promise<{ units: LookedUnit[]; rules: DutyRule[] }> {
   const { rows } = await sql<{ units: LookedUnit[]; rules: DutyRule[] }>`
-    with asked as (select unnest(${[...unitIds]}::uuid[]) as id),
+    with asked as (select unnest((select ${[...unitIds]}::uuid[])) as id),
     looked as (
       select u.id, u.model_id as "modelId", u.dock_id as "dockId", u.entered_service_on as "enteredServiceOn",
              m.propulsion, m.stroke, coalesce(u.carb_count_override, m.carb_count) as "carbCount",

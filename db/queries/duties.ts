@@ -18,8 +18,9 @@ export type WorkToOpen = {
   engines: number;
 };
 
+/** The list stands in a select of its own: PostgreSQL then has no reason to plan a prepared statement for each list. */
 const among = (column: string, unitIds: UnitIds) =>
-  unitIds === 'all' ? sql`true` : sql`${sql.ref(column)} = any(${[...unitIds]}::uuid[])`;
+  unitIds === 'all' ? sql`true` : sql`${sql.ref(column)} = any((select ${[...unitIds]}::uuid[])::uuid[])`;
 
 /** Whether a due point `p` is upcoming or worse, by live meter `m` and the local day at dock `d`. */
 const withinLead = (now: Date) => sql`(m.engine_hours_tenths >= p.upcoming_from_tenths
