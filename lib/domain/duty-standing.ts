@@ -2,7 +2,7 @@
  * How a duty (a rule on a unit) stands by its stored due points: its worst trigger, and how much is left of each.
  */
 import { type CalendarDay, daysBetween } from './calendar-day';
-import { type DuePoint, type DueState, type Standing, computeState, computeWorstState } from './due';
+import { type DuePoint, type DueState, type Standing, computeState } from './due';
 
 /** A due point as it is stored: the three columns of its kind, the others null. */
 export type DuePointColumns = {
