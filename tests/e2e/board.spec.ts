@@ -1,34 +1,6 @@
-import AxeBuilder from '@axe-core/playwright';
-import type { Browser, Page } from '@playwright/test';
-import { addSignIn, minutesAgo, openDock, PASSWORD } from '../support/crew';
-import { expect, test, type Running } from '../support/e2e';
-import { signIn } from '../support/sign-in';
-
-/** A page of somebody of that role, signed in. */
-async function pageOf(browser: Browser, { app, database }: Running, role: 'manager' | 'dock', width = 360) {
-  const email = await addSignIn(database.db, role);
-  const cookie = await signIn(app.baseUrl, email, PASSWORD);
-  const context = await browser.newContext({ baseURL: app.baseUrl, viewport: { width, height: 780 } });
-  await context.addCookies(
-    cookie.split('; ').map((pair) => {
-      const at = pair.indexOf('=');
-      return { name: pair.slice(0, at), value: pair.slice(at + 1), url: app.baseUrl };
-    }),
-  );
-  const page = await context.newPage();
-  page.setDefaultTimeout(10_000);
-  return page;
-}
-
-async function type(page: Page, number: string): Promise<void> {
-  const names: Record<string, string> = { '.': 'Decimal point' };
-  for (const key of number) await page.getByRole('button', { name: names[key] ?? key, exact: true }).click();
-}
-
-async function expectAccessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join(' ')}`)).toEqual([]);
-}
+import { minutesAgo, openDock } from '../support/crew';
+import { expect, test } from '../support/e2e';
+import { expectAccessible, pageOf, typeHours } from '../support/pages';
 
 test('two taps and a number: hours logged at the dock hold the unit in the manager’s open page', async ({
   browser,
@@ -53,7 +25,7 @@ test('two taps and a number: hours logged at the dock hold the unit in the manag
   await hand.getByRole('link', { name: /N-1.*Check in/ }).click();
 
   await expect(hand.getByText('100.0 h', { exact: true })).toBeVisible();
-  await type(hand, '102.3');
+  await typeHours(hand, '102.3');
   await expect(hand.getByText('2.3 h since the last reading.')).toBeVisible();
   await expectAccessible(hand);
   await hand.getByRole('button', { name: 'Check in N-1' }).click();
@@ -81,7 +53,7 @@ test('without a connection what was typed is kept, and sent once when it is back
   const { unit } = await openDock(empty.database.db, { now: minutesAgo(300) });
   const hand = await pageOf(browser, empty, 'dock');
   await hand.goto(`/board/check-in/${unit.id}`);
-  await type(hand, '100.9');
+  await typeHours(hand, '100.9');
   await hand.getByRole('button', { name: 'Report a defect' }).click();
   await hand.getByLabel('What is wrong').fill('Seat torn');
   await hand.context().setOffline(true);
@@ -114,7 +86,7 @@ test('a number lower than the last is refused with its value and date', async ({
   const { unit } = await openDock(empty.database.db, { now: minutesAgo(300) });
   const hand = await pageOf(browser, empty, 'dock');
   await hand.goto(`/board/check-in/${unit.id}`);
-  await type(hand, '99.9');
+  await typeHours(hand, '99.9');
   await expect(hand.getByText('0.1 h less than the last reading. Read the meter again.')).toBeVisible();
   await hand.getByRole('button', { name: 'Check in N-1' }).click();
   await expect(hand.getByText(/The meter showed 100\.0 h on \w{3} \d+ \w{3} \d{4}/)).toBeVisible();

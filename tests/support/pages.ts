@@ -1,0 +1,41 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, type Browser, type Page } from '@playwright/test';
+import type { Role } from '@/lib/domain/access';
+import { addSignIn, PASSWORD } from './crew';
+import type { Running } from './e2e';
+import { signIn } from './sign-in';
+
+/** A page of somebody new of that role, signed in. */
+export async function pageOf(
+  browser: Browser,
+  { app, database }: Running,
+  role: Role,
+  width = 360,
+): Promise<Page> {
+  const email = await addSignIn(database.db, role);
+  const cookie = await signIn(app.baseUrl, email, PASSWORD);
+  const context = await browser.newContext({ baseURL: app.baseUrl, viewport: { width, height: 800 } });
+  await context.addCookies(
+    cookie.split('; ').map((pair) => {
+      const at = pair.indexOf('=');
+      return { name: pair.slice(0, at), value: pair.slice(at + 1), url: app.baseUrl };
+    }),
+  );
+  const page = await context.newPage();
+  page.setDefaultTimeout(10_000);
+  return page;
+}
+
+/** Types a number on the dock's keypad. */
+export async function typeHours(page: Page, number: string): Promise<void> {
+  for (const key of number) {
+    const name = key === '.' ? 'Decimal point' : key;
+    await page.getByRole('button', { name, exact: true }).click();
+  }
+}
+
+/** axe finds nothing on the page as it stands. */
+export async function expectAccessible(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join(' ')}`)).toEqual([]);
+}
