@@ -79,6 +79,11 @@ export function changePerson(
     .executeTakeFirstOrThrow();
 }
 
+/** Locks the person against every other writer of them until the transaction ends. */
+export async function lockPerson(trx: Transaction<DB>, id: string): Promise<void> {
+  await trx.selectFrom('person').select('id').where('id', '=', id).forUpdate().execute();
+}
+
 /** Locks the active managers of all docks, so that two of them cannot take the right away from each other. */
 export async function lockManagersOfAllDocks(trx: Transaction<DB>): Promise<string[]> {
   const rows = await trx

@@ -1,5 +1,5 @@
 import { countPasswordResets, insertPasswordReset } from '@/db/queries/password-resets';
-import { findCredentialByEmail } from '@/db/queries/people';
+import { findCredentialByEmail, lockPerson } from '@/db/queries/people';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import type { AskPasswordReset } from '@/lib/schemas/password-reset';
@@ -23,6 +23,7 @@ export async function askPasswordReset(ctx: Context, { email }: AskPasswordReset
   const since = new Date(ctx.now.getTime() - HOUR_MS);
   const expiresAt = new Date(ctx.now.getTime() + HOUR_MS);
   await runTransaction(ctx.db, async (trx) => {
+    await lockPerson(trx, person.id);
     if ((await countPasswordResets(trx, person.id, since)) >= LETTERS_AN_HOUR) return;
     await insertPasswordReset(trx, { personId: person.id, tokenHash: hash, now: ctx.now, expiresAt });
     const letter = writeLetter({

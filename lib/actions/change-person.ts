@@ -1,8 +1,8 @@
-import { changePerson as changePersonRow } from '@/db/queries/people';
+import { changePerson as changePersonRow, lockManagersOfAllDocks } from '@/db/queries/people';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import type { ChangePerson, Person } from '@/lib/schemas/person';
-import { accessPerson } from './access';
+import { accessPerson, requireFleetWide } from './access';
 import { checkDocks } from './check-docks';
 import { keepAManager } from './keep-a-manager';
 import { toPerson } from './shape-person';
@@ -16,8 +16,11 @@ export async function changePerson(
   ctx: Context,
   { id, ...input }: ChangePerson & { id: string },
 ): Promise<Person> {
+  requireFleetWide(ctx, 'person.write');
   await checkDocks(ctx, input.dockIds ?? []);
   return runTransaction(ctx.db, async (trx) => {
+    // Every change of role or docks waits for the one before, so none is made from what is no longer so.
+    await lockManagersOfAllDocks(trx);
     const before = await accessPerson({ ...ctx, db: trx }, id, 'person.write');
     const role = input.role ?? before.role;
     const dockIds = [...new Set(input.dockIds ?? before.dock_ids)];
@@ -25,9 +28,9 @@ export async function changePerson(
     const staysManagerOfAll = role === 'manager' && dockIds.length === 0;
     if (!staysManagerOfAll) await keepAManager(trx, id, role === 'manager' ? 'dockIds' : 'role');
     const change = {
-      name: input.name ?? before.name,
-      role,
-      dock_ids: dockIds,
+      ...(input.name !== undefined && { name: input.name }),
+      ...(input.role !== undefined && { role }),
+      ...(input.dockIds !== undefined && { dock_ids: dockIds }),
       ...(role !== 'manager' && { digest_wanted: false }),
     };
     return toPerson(await changePersonRow(trx, id, change, { endSessions: moves }));
