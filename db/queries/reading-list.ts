@@ -48,17 +48,19 @@ export function listUnitReadings(
   );
 }
 
-/** The readings of these docks that wait for a manager, the latest first. */
+/** The readings of one unit, or of the units of these docks, that wait for a manager, the latest first. */
 export function listReadingsToReview(
   db: Kysely<DB>,
-  dockIds: 'all' | readonly string[],
+  of: { unitId: string } | { dockIds: 'all' | readonly string[] },
   after: After,
   limit: number,
 ): Promise<ListedReading[]> {
   const among =
-    dockIds === 'all'
-      ? sql`true`
-      : sql`unit_id in (select id from unit where dock_id = any(${[...dockIds]}::uuid[]))`;
+    'unitId' in of
+      ? sql`unit_id = ${of.unitId}::uuid`
+      : of.dockIds === 'all'
+        ? sql`true`
+        : sql`unit_id in (select id from unit where dock_id = any(${[...of.dockIds]}::uuid[]))`;
   const waiting = sql`
     select * from reading
      where review_code is not null and reviewed_at is null and voided_at is null and ${among} and ${isAfter(after)}

@@ -39,10 +39,11 @@ async function chosen(
   if (query.review) requireSomewhere(ctx, 'reading.review');
   if (query.unitId) {
     const unit = await accessUnit(ctx, query.unitId, query.review ? 'reading.review' : 'unit.read', 'unitId');
-    const rows = await listUnitReadings(ctx.db, unit.id, after, limit);
-    return query.review ? rows.filter((row) => row.review_code && !row.reviewed_at && !row.voided_at) : rows;
+    return query.review
+      ? listReadingsToReview(ctx.db, { unitId: unit.id }, after, limit)
+      : listUnitReadings(ctx.db, unit.id, after, limit);
   }
-  if (query.review) return listReadingsToReview(ctx.db, visibleDocks(ctx.actor), after, limit);
+  if (query.review) return listReadingsToReview(ctx.db, { dockIds: visibleDocks(ctx.actor) }, after, limit);
   throw refuseField('unitId', 'name a unit, or ask for review=open');
 }
 

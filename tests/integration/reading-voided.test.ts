@@ -158,6 +158,11 @@ describe('a reading kept for review', () => {
     expect(waiting.items).toMatchObject([
       { id, review: 'unusual_jump', confirmReason: 'Ran on the hose', previous: { engineHours: 100 } },
     ]);
+    // Later ones that wait for nobody are not in the way of the page.
+    await back('11:20', 102.1);
+    await back('11:40', 102.2);
+    const one = await listReadings(at('12:00'), { unitId, review: 'open', limit: 1 });
+    expect(one.items.map((reading) => reading.id)).toEqual([id]);
     await reviewReading(at('12:00'), id, { note: 'Right' });
     expect((await listReadings(at('12:00'), { review: 'open' })).items).toEqual([]);
     await expect(reviewReading(at('12:00'), id, {})).rejects.toMatchObject({ code: 'conflict' });
