@@ -96,8 +96,9 @@ function checkInstants(input: CreateCheckOut, now: Date, seen: Date, timeZone: s
 
 async function refuseHeld(ctx: Context, unit: UnitRow, { plannedHours }: CreateCheckOut): Promise<void> {
   const [row] = await listReadiness(ctx.db, { unitId: unit.id }, ctx.now);
+  if (!row) throw refuseField('unitId', 'The unit is retired.', 'conflict');
   const plannedTenths = plannedHours === undefined ? null : toTenths(plannedHours);
-  const holds = toHolds(row!, { at: ctx.now, onDay: null, plannedTenths });
+  const holds = toHolds(row, { at: ctx.now, onDay: null, plannedTenths });
   if (holds.length === 0) return;
   throw new Refusal(
     'unit_held',

@@ -1,5 +1,5 @@
 import { findDefect, insertDefect } from '@/db/queries/defects';
-import { lockUnits } from '@/db/queries/units';
+import { countWrites, lockMeters } from '@/db/queries/units';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import { personIdOf } from '@/lib/domain/access';
@@ -20,9 +20,10 @@ export async function reportDefect(ctx: Context, input: CreateDefect): Promise<D
   if (unit.retired_at) throw refuseField('unitId', 'The unit is retired.', 'conflict');
   const row = await refusingTaken({ defect_pkey: ['id', 'Another defect has this id.'] }, () =>
     runTransaction(ctx.db, async (trx) => {
+      await lockMeters(trx, [unit.id]);
       const first = input.id ? await findDefect(trx, input.id) : undefined;
       if (first) return first;
-      await lockUnits(trx, [unit.id]);
+      await countWrites(trx, [unit.id]);
       const { id } = await insertDefect(trx, {
         ...(input.id && { id: input.id }),
         unit_id: unit.id,
