@@ -64,9 +64,9 @@ export function describeLift(hold: Pick<Hold, 'reason'> & { ruleName?: string | 
     case 'overdue':
       return `Lifted when a mechanic closes the task${hold.ruleName ? ` for ${hold.ruleName}` : ''}.`;
     case 'defect':
-      return 'Lifted when the defect is closed, or a mechanic or manager says it need not hold the unit.';
+      return 'Lifted when a mechanic or manager closes its task or clears the defect.';
     case 'laid_up':
-      return 'Lifted when a manager brings the unit back into service.';
+      return 'Lifted when a mechanic or manager ends the lay-up.';
     case 'not_assessed':
       return 'Lifted by the worker within seconds; if it stays, tell a manager that the worker may be down.';
     case 'too_little_left':

@@ -56,8 +56,8 @@ describe('a hold in words', () => {
   it('says what lifts each', () => {
     expect(describeLift({ reason: 'overdue', ruleName: 'Pump inspection' })).toContain('closes the task');
     expect(describeLift({ reason: 'overdue' })).toContain('closes the task');
-    expect(describeLift({ reason: 'defect' })).toContain('defect is closed');
-    expect(describeLift({ reason: 'laid_up' })).toContain('back into service');
+    expect(describeLift({ reason: 'defect' })).toContain('clears the defect');
+    expect(describeLift({ reason: 'laid_up' })).toContain('ends the lay-up');
     expect(describeLift({ reason: 'not_assessed' })).toContain('worker');
   });
 });
