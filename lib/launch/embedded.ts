@@ -1,7 +1,7 @@
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
 import type { Kysely } from 'kysely';
-import { databaseIsEmpty } from '@/db/queries/emptiness';
+import { findOperator } from '@/db/queries/operator';
 import { createDatabase } from '@/db/client';
 import { databaseExists, dropDatabase, makeDatabase, renameDatabase } from '@/db/databases';
 import { type LocalServer, startLocalServer } from '@/db/local-server';
@@ -25,7 +25,7 @@ export async function startEmbeddedServer(root: string): Promise<LocalServer> {
 export async function isEmpty(url: string): Promise<boolean> {
   const db = createDatabase({ url, max: 1 });
   try {
-    return await databaseIsEmpty(db);
+    return (await findOperator(db)) === undefined;
   } finally {
     await db.destroy();
   }
