@@ -72,12 +72,7 @@ const schema = z.object({
   MAIL_FROM: mailbox.default('Wakewright <wakewright@localhost>'),
   MAILBOX_URL: origin.optional(),
   SETUP_TOKEN: z.string().min(16, 'must be at least 16 characters long').optional(),
-  TRUST_PROXY: z.coerce
-    .number({ error: 'must be a number' })
-    .int('must be a whole number')
-    .min(0, 'must be at least 0')
-    .max(10, 'must be at most 10')
-    .default(0),
+  TRUST_PROXY: count(10, 0).default(0),
   DB_POOL_MAX: count(200).default(10),
   WORKER_CONCURRENCY: count(50).default(4),
   WORKER_BEAT_MS: count(5_000, 200).default(5_000),
