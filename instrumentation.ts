@@ -1,5 +1,8 @@
 /** Runs once when the web server starts, before the first request. */
 export async function register(): Promise<void> {
-  const { writeSocketAddress } = await import('@/lib/http/socket-address');
-  writeSocketAddress();
+  // Next compiles this for its edge runtime too, which has no sockets, and leaves the import out there.
+  if (process.env.NEXT_RUNTIME === 'nodejs') {
+    const { writeSocketAddress } = await import('@/lib/http/socket-address');
+    writeSocketAddress();
+  }
 }

@@ -44,9 +44,13 @@ const clock: Rule = {
   },
 };
 
-/** `lib/env.ts` reads the environment; the launcher hands it on to its children; configurations run before both. */
+/**
+ * `lib/env.ts` reads the environment; the launcher hands it on to its children; configurations run before both. What
+ * `instrumentation.ts` names is replaced when it is compiled: for which runtime.
+ */
 const environment: Rule = {
-  applies: (file) => isCode(file) && file !== 'lib/env.ts' && !file.startsWith('lib/launch/'),
+  applies: (file) =>
+    isCode(file) && !['lib/env.ts', 'instrumentation.ts'].includes(file) && !file.startsWith('lib/launch/'),
   broken: (node) => {
     const imported = ts.isImportDeclaration(node) && /^(node:)?process$/.test(textOf(node.moduleSpecifier));
     const taken =
