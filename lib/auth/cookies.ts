@@ -5,9 +5,14 @@ export function usesSecureCookies(): boolean {
   return env().PUBLIC_URL.startsWith('https:');
 }
 
-/** The name under which next-auth keeps the session. */
-export function sessionCookieName(): string {
-  return usesSecureCookies() ? '__Secure-next-auth.session-token' : 'next-auth.session-token';
+/**
+ * The name under which next-auth keeps the session: `3000.next-auth.session-token` at `http://127.0.0.1:3000`. A
+ * browser tells cookies of one host apart by name and not by port, and two checkouts would sign each other out. The
+ * port is in front, for next-auth takes a cookie whose name only goes on after ours for a part of it.
+ */
+export function sessionCookieName(publicUrl = env().PUBLIC_URL): string {
+  const { protocol, port } = new URL(publicUrl);
+  return `${protocol === 'https:' ? '__Secure-' : ''}${port && `${port}.`}next-auth.session-token`;
 }
 
 /** The name under which a browser keeps what makes it a known device. */

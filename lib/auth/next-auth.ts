@@ -8,7 +8,7 @@ import { env } from '@/lib/env';
 import { Refusal } from '@/lib/errors';
 import { findActor } from './actor';
 import { parseCredentials } from './credentials';
-import { deviceCookieName, readCookie, usesSecureCookies } from './cookies';
+import { deviceCookieName, readCookie, sessionCookieName, usesSecureCookies } from './cookies';
 import { readSessionToken, signSessionToken } from './session-token';
 
 declare module 'next-auth' {
@@ -36,6 +36,12 @@ export function authOptions(request: AuthRequest): NextAuthOptions {
   return {
     secret,
     useSecureCookies: usesSecureCookies(),
+    cookies: {
+      sessionToken: {
+        name: sessionCookieName(),
+        options: { httpOnly: true, sameSite: 'lax', path: '/', secure: usesSecureCookies() },
+      },
+    },
     session: { strategy: 'jwt', maxAge: SESSION_MS / 1000 },
     pages: { signIn: '/sign-in', signOut: '/sign-in', error: '/sign-in' },
     providers: [

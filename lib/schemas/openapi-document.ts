@@ -81,7 +81,12 @@ export function describeApi(version: string): OpenApi {
       schemas,
       securitySchemes: {
         apiKey: { type: 'http', scheme: 'bearer', description: 'An API key of one’s own.' },
-        session: { type: 'apiKey', in: 'cookie', name: 'next-auth.session-token' },
+        session: {
+          type: 'apiKey',
+          in: 'cookie',
+          name: 'next-auth.session-token',
+          description: 'With `__Secure-` in front over https, and `<port>.` where the address names a port.',
+        },
       },
       responses: {
         Problem: {

@@ -6,6 +6,7 @@ import { makeDatabase } from '@/db/databases';
 import { migrateToLatest } from '@/db/migrate';
 import type { DB } from '@/db/tables';
 import { refreshFleet } from '@/lib/actions/refresh-fleet';
+import { sessionCookieName } from '@/lib/auth/cookies';
 import { signSessionToken } from '@/lib/auth/session-token';
 import type { Context } from '@/lib/context';
 import { startApp, type App } from '../support/app';
@@ -95,7 +96,7 @@ async function openSession(db: Kysely<DB>, app: App, email: string): Promise<str
   );
   const expiresAtSeconds = Math.floor(expiresAt.getTime() / 1000);
   const token = signSessionToken({ sessionId, expiresAtSeconds }, app.env.AUTH_SECRET);
-  return `next-auth.session-token=${token}`;
+  return `${sessionCookieName(app.env.PUBLIC_URL)}=${token}`;
 }
 
 async function untilIdle(db: Kysely<DB>): Promise<void> {

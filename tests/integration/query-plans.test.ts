@@ -11,6 +11,7 @@ import { listHistory } from '@/lib/actions/list-history';
 import { openTasks } from '@/lib/actions/open-tasks';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import { refreshFleet } from '@/lib/actions/refresh-fleet';
+import { sessionCookieName } from '@/lib/auth/cookies';
 import { signSessionToken } from '@/lib/auth/session-token';
 import { findActor } from '@/lib/auth/actor';
 import type { Context } from '@/lib/context';
@@ -86,7 +87,7 @@ describe('of one unit or one session, no large table is read through', () => {
       () => {
         const expiresAtSeconds = Math.floor(now.getTime() / 1000) + 3600;
         const token = signSessionToken({ sessionId, expiresAtSeconds }, env().AUTH_SECRET);
-        return findActor(listening, new Headers({ cookie: `next-auth.session-token=${token}` }), now);
+        return findActor(listening, new Headers({ cookie: `${sessionCookieName()}=${token}` }), now);
       },
     ],
     [

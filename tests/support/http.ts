@@ -5,6 +5,7 @@ import type { AddressInfo } from 'node:net';
 import path from 'node:path';
 import { afterAll, beforeAll } from 'vitest';
 import { getDatabase } from '@/db/client';
+import { sessionCookieName } from '@/lib/auth/cookies';
 import { signSessionToken } from '@/lib/auth/session-token';
 import type { Role } from '@/lib/domain/access';
 
@@ -146,5 +147,5 @@ async function signInHere(personId: string): Promise<string> {
     .returning('id')
     .executeTakeFirstOrThrow();
   const token = { sessionId: id, expiresAtSeconds: Math.floor(expires.getTime() / 1000) };
-  return `next-auth.session-token=${signSessionToken(token, SECRET)}`;
+  return `${sessionCookieName()}=${signSessionToken(token, SECRET)}`;
 }
