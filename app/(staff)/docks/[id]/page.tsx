@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { DockForm } from '@/components/docks/DockForm';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { PageHeader } from '@/components/ui/PageHeader';
@@ -6,10 +7,17 @@ import { openDockForm } from '@/lib/actions/open-dock-form';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Dock' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function DockPage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await orNotFound(openDockForm(await pageContext(), await pageId(params)));
+const load = cache(async (id: string) => orNotFound(openDockForm(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { dock } = await load(await pageId(params));
+  return { title: dock?.name ?? 'Dock' };
+}
+
+export default async function DockPage({ params }: Props) {
+  const data = await load(await pageId(params));
   if (!data.dock) return null;
   return (
     <>

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { ModelForm } from '@/components/models/ModelForm';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { PageHeader } from '@/components/ui/PageHeader';
@@ -6,10 +7,17 @@ import { openModelForm } from '@/lib/actions/open-model-form';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Model' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function ModelPage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await orNotFound(openModelForm(await pageContext(), await pageId(params)));
+const load = cache(async (id: string) => orNotFound(openModelForm(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { model } = await load(await pageId(params));
+  return { title: model?.name ?? 'Model' };
+}
+
+export default async function ModelPage({ params }: Props) {
+  const data = await load(await pageId(params));
   if (!data.model) return null;
   return (
     <>

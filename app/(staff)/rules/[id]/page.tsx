@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { EndRule } from '@/components/rules/EndRule';
 import { RuleForm } from '@/components/rules/RuleForm';
 import { Notice } from '@/components/ui/Notice';
@@ -7,10 +8,17 @@ import { openRuleForm } from '@/lib/actions/open-rule-form';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Rule' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function RulePage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await orNotFound(openRuleForm(await pageContext(), await pageId(params)));
+const load = cache(async (id: string) => orNotFound(openRuleForm(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { rule } = await load(await pageId(params));
+  return { title: rule?.name ?? 'Rule' };
+}
+
+export default async function RulePage({ params }: Props) {
+  const data = await load(await pageId(params));
   const { rule, mayWrite } = data;
   if (!rule) return null;
   return (

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { Cautions } from '@/components/task/Cautions';
 import { CloseForm } from '@/components/task/CloseForm';
 import { ClosureList } from '@/components/task/ClosureList';
@@ -17,11 +18,18 @@ import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Task' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function TaskPage({ params }: { params: Promise<{ id: string }> }) {
+const load = cache(async (id: string) => orNotFound(getTask(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const task = await load(await pageId(params));
+  return { title: `${task.title} on ${task.fleetNumber}` };
+}
+
+export default async function TaskPage({ params }: Props) {
   const ctx = await pageContext();
-  const task = await orNotFound(getTask(ctx, await pageId(params)));
+  const task = await load(await pageId(params));
   const now = ctx.now.toISOString();
   const open = task.endedAt === null;
   const mayWork = open && may(ctx, 'task.write', task.dockId);

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { UnitActions } from '@/components/units/UnitActions';
 import { UnitDuties } from '@/components/units/UnitDuties';
 import { UnitFacts } from '@/components/units/UnitFacts';
@@ -13,16 +14,26 @@ import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 import { unitPageQuery } from '@/lib/schemas/fleet';
 
-export const metadata: Metadata = { title: 'Unit' };
-
 type Props = {
   params: Promise<{ id: string }>;
   searchParams: Promise<Record<string, string | string[] | undefined>>;
 };
 
-export default async function UnitPage({ params, searchParams }: Props) {
-  const query = unitPageQuery.parse(await searchParams);
-  const page = await orNotFound(openUnit(await pageContext(), await pageId(params), query));
+const load = cache(async (id: string, query: string) =>
+  orNotFound(openUnit(await pageContext(), id, unitPageQuery.parse(JSON.parse(query)))),
+);
+
+/** Metadata and page ask with the same words, so the unit is read once. */
+const loadFrom = async ({ params, searchParams }: Props) =>
+  load(await pageId(params), JSON.stringify(await searchParams));
+
+export async function generateMetadata(props: Props): Promise<Metadata> {
+  const { unit } = await loadFrom(props);
+  return { title: `${unit.fleetNumber} at ${unit.dockName}` };
+}
+
+export default async function UnitPage(props: Props) {
+  const page = await loadFrom(props);
   const { unit, duties, may } = page;
   return (
     <>

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { BaselineForm } from '@/components/rules/BaselineForm';
 import { BaselineHistory } from '@/components/rules/BaselineHistory';
 import { EmptyState } from '@/components/ui/EmptyState';
@@ -9,10 +10,17 @@ import { openBaselines } from '@/lib/actions/open-baselines';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Baselines' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function BaselinesPage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await orNotFound(openBaselines(await pageContext(), await pageId(params)));
+const load = cache(async (id: string) => orNotFound(openBaselines(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { unit } = await load(await pageId(params));
+  return { title: `Last done before ${unit.fleetNumber} came` };
+}
+
+export default async function BaselinesPage({ params }: Props) {
+  const data = await load(await pageId(params));
   const { unit, standing, baselines, mayRecord, mayWithdraw } = data;
   return (
     <>

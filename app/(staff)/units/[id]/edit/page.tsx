@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { cache } from 'react';
 import { RetireUnit } from '@/components/units/RetireUnit';
 import { UnitForm } from '@/components/units/UnitForm';
 import { LinkButton } from '@/components/ui/LinkButton';
@@ -8,10 +9,17 @@ import { openUnitForm } from '@/lib/actions/open-unit-form';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
-export const metadata: Metadata = { title: 'Change a unit' };
+type Props = { params: Promise<{ id: string }> };
 
-export default async function EditUnitPage({ params }: { params: Promise<{ id: string }> }) {
-  const data = await orNotFound(openUnitForm(await pageContext(), await pageId(params)));
+const load = cache(async (id: string) => orNotFound(openUnitForm(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { unit } = await load(await pageId(params));
+  return { title: `Change ${unit?.fleetNumber ?? 'a unit'}` };
+}
+
+export default async function EditUnitPage({ params }: Props) {
+  const data = await load(await pageId(params));
   const { unit } = data;
   if (!unit) return null;
   return (
