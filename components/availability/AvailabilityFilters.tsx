@@ -17,7 +17,11 @@ export function AvailabilityFilters({
   failure: Failure | null;
 }) {
   return (
-    <form role="search" onSubmit={(event) => event.preventDefault()} className="grid gap-4 sm:grid-cols-3">
+    <form
+      role="search"
+      onSubmit={(event) => event.preventDefault()}
+      className="grid grid-cols-2 gap-4 sm:grid-cols-3 [&>:first-child]:col-span-full sm:[&>:first-child]:col-span-1"
+    >
       <Select
         name="dockId"
         label="Dock"

@@ -19,7 +19,7 @@ export function DockFields({ dock, timeZones, allYear, onAllYear, disabled, erro
   return (
     <>
       <Section title="Where it is">
-        <div className="grid gap-5 sm:grid-cols-2">
+        <div className="grid gap-5 sm:grid-cols-2 sm:items-end">
           <TextInput
             name="name"
             label="Name"

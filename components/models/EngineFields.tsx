@@ -46,7 +46,7 @@ export function EngineFields({
           error={error('stroke')}
         />
       )}
-      <div className="grid gap-5 sm:grid-cols-3">
+      <div className="grid gap-5 sm:grid-cols-3 sm:items-end">
         <NumberInput
           name="engines"
           label={electric ? 'Motors' : 'Engines'}

@@ -76,7 +76,7 @@ function Standing({ rule }: { rule: ListedRule }) {
   return (
     <ul className="grid gap-1">
       {shown.map((state) => (
-        <li key={state}>
+        <li key={state} className="whitespace-nowrap">
           <StateMark state={state} detail={`· ${rule.states[state]}`} plain />
         </li>
       ))}

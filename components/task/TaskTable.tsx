@@ -12,7 +12,7 @@ const COLUMNS = [
   { id: 'state', header: 'State' },
   { id: 'planned', header: 'Planned', sortable: true },
   { id: 'takes', header: 'Takes', align: 'end' as const, sortable: true },
-  { id: 'start', header: 'Start' },
+  { id: 'start', header: 'Who' },
 ];
 
 /** Tasks in the order they are given, one row each; `mayWork` shows the button that starts one. */

@@ -23,7 +23,7 @@ export function UnitStanding({ page }: { page: UnitPage }) {
         <p>
           {out.startedAt ? (
             <>
-              Out since <Timestamp at={out.startedAt} now={now} timeZone={timeZone} />
+              Out since <Timestamp at={out.startedAt} now={now} timeZone={timeZone} show="absolute" />
             </>
           ) : (
             'Out'
@@ -41,7 +41,7 @@ export function UnitStanding({ page }: { page: UnitPage }) {
             <li key={index} className="max-w-prose border-l-4 border-held pl-3">
               <p>{hold.text}</p>
               <p className="text-ink-soft">
-                Since <Timestamp at={hold.since} now={now} timeZone={timeZone} />
+                Since <Timestamp at={hold.since} now={now} timeZone={timeZone} show="absolute" />
               </p>
               {hold.taskId ? (
                 <Link href={`/tasks/${hold.taskId}`} className="link inline-flex min-h-target items-center">

@@ -31,7 +31,7 @@ export function FleetWaterline({ docks, label }: { docks: FleetDock[]; label: st
       {docks.map((dock) => (
         <div
           key={dock.key}
-          className="keep-together grid gap-2 lg:grid-cols-[16rem_1fr] lg:items-end lg:gap-6"
+          className="keep-together grid gap-2 lg:grid-cols-[20rem_1fr] lg:items-end lg:gap-6"
         >
           <div>
             <h3 className="text-xl">
