@@ -82,8 +82,9 @@ test('a day that comes holds the unit at the dock’s midnight, and tomorrow can
   });
   await createRule(at('09:00'), rule);
   await refreshDue(at('09:00'), { unitIds: [unitId] });
+  // By hand: 2.0 h at 5 h in 3 days are 1.2 days, so the extinguisher's one day is nearer than the rebuild.
   expect((await ask()).ready).toMatchObject([
-    { daysToHold: 1, holdingRuleName: 'Carburettor rebuild of Cais Norte' },
+    { hoursToHold: 2, daysToHold: 1, holdingRuleName: 'Fire extinguisher' },
   ]);
   // Lisbon's midnight of 3 June is 23:00 UTC of the 2nd.
   expect((await ask({}, '22:59')).held).toEqual([]);

@@ -86,15 +86,18 @@ describe('what a check-in costs', () => {
     expect(asked[1]!.sql).not.toMatch(/\b(insert|update|delete)\b/);
   });
 
-  test('adds one to the transactions that wrote', async () => {
-    const written = () =>
-      sql<{ id: string }>`select pg_current_xact_id()::text as id`
-        .execute(counting)
-        .then(({ rows }) => Number(rows[0]!.id));
-    const before = await written();
-    await checkIn(at('12:00'), { id: randomUUID(), unitId, hours: 101 });
-    // The check-in's own, and the one that asks.
-    expect((await written()) - before).toBe(2);
+  test('writes everything in one transaction, the job too', async () => {
+    const id = randomUUID();
+    await checkIn(at('12:00'), { id, unitId, hours: 101 });
+    const { rows } = await sql<{ what: string; xmin: string }>`
+      select 'reading' as what, xmin::text from reading where id = ${id}
+      union all select 'outing', o.xmin::text from outing o join reading r on r.outing_id = o.id where r.id = ${id}
+      union all select 'meter', xmin::text from live_meter where unit_id = ${unitId}
+      union all select 'job', j.xmin::text from graphile_worker._private_jobs j
+        where j.payload::text like ${`%${unitId}%`}
+          and j.xmin = (select xmin from reading where id = ${id})`.execute(database.db);
+    expect(rows.map(({ what }) => what).sort()).toEqual(['job', 'meter', 'outing', 'reading']);
+    expect(new Set(rows.map(({ xmin }) => xmin)).size).toBe(1);
   });
 });
 
