@@ -6,9 +6,6 @@ import { workerStatus } from '@/lib/actions/worker-status';
 import { pageContext } from '@/lib/auth/page';
 import { parseTheme, themeCookie } from '@/lib/client/theme';
 
-/** Seconds behind from which the worker's lag is shown: an ordinary job is done within two. */
-const LAG_SHOWN_FROM = 15;
-
 /** The frame of every signed-in screen. A page asks for its own context: a layout keeps nobody out. */
 export default async function StaffLayout({ children }: { children: ReactNode }) {
   const ctx = await pageContext();
@@ -19,7 +16,7 @@ export default async function StaffLayout({ children }: { children: ReactNode })
       destinations={destinationsFor(person)}
       person={{ name: person.name, role: person.role }}
       theme={parseTheme((await cookies()).get(themeCookie)?.value)}
-      lag={lagSeconds >= LAG_SHOWN_FROM ? lagSeconds : null}
+      lagSeconds={lagSeconds}
     >
       {children}
     </StaffFrame>

@@ -5,7 +5,7 @@ export function lagText(seconds: number): string {
   return `${Math.floor(seconds / 3_600)} hours`;
 }
 
-/** Says that the worker is behind. Draws nothing while it keeps up (null). */
+/** Says that the worker is behind; announced once, not at each second. Draws nothing while it keeps up (null). */
 export function LagLine({ seconds }: { seconds: number | null }) {
   if (seconds === null) return null;
   return (
@@ -13,8 +13,8 @@ export function LagLine({ seconds }: { seconds: number | null }) {
       role="status"
       className="border-y-2 border-warn bg-warn-tint px-gutter py-2 text-center font-semibold text-warn"
     >
-      Background work is {lagText(seconds)} behind. New due points and tasks may be missing; overdue units are
-      held all the same.
+      Background work is <span aria-live="off">{lagText(seconds)}</span> behind. New due points and tasks may
+      be missing; overdue units are held all the same.
     </p>
   );
 }
