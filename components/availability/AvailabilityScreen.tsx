@@ -8,18 +8,29 @@ import type { Availability } from '@/lib/schemas/availability';
 import { AsOf } from './AsOf';
 import { AvailabilityFilters } from './AvailabilityFilters';
 import { AvailabilityLists } from './AvailabilityLists';
+import { NoUnits } from './NoUnits';
 import { toWaterline } from './room-words';
 
 export type NamedDock = { id: string; name: string; timeZone: string };
 
 /** Which units may be hired out, of which docks, for how long, on which day: kept up to date while it is seen. */
-export function AvailabilityScreen({ docks, first }: { docks: NamedDock[]; first: Availability }) {
+export function AvailabilityScreen({
+  docks,
+  first,
+  mayAdd,
+}: {
+  docks: NamedDock[];
+  first: Availability;
+  mayAdd: boolean;
+}) {
   const [asked, setAsked] = useState<AvailabilityAsked>({});
   const isFirst = !asked.dockId && !asked.on && !asked.hours;
   const { data = first, failure } = useAvailability(asked, isFirst ? first : undefined);
   const refused = failure?.code === 'invalid_input' ? failure : null;
   const shownDocks = asked.dockId ? docks.filter(({ id }) => id === asked.dockId) : docks;
   const zone = (shownDocks[0] ?? docks[0])?.timeZone ?? 'UTC';
+  const empty = data.held.length + data.ready.length + data.out.length === 0;
+  if (empty && isFirst) return <NoUnits title="No unit yet" mayAdd={mayAdd} />;
   return (
     <div className="grid gap-6">
       <AvailabilityFilters docks={docks} asked={asked} onChange={setAsked} failure={refused} />
@@ -32,7 +43,11 @@ export function AvailabilityScreen({ docks, first }: { docks: NamedDock[]; first
           docks={shownDocks.map((dock) => toDock(dock, data))}
         />
       </section>
-      <AvailabilityLists data={data} docks={docks} />
+      {empty ? (
+        <NoUnits title="No unit at this dock" mayAdd={mayAdd} />
+      ) : (
+        <AvailabilityLists data={data} docks={docks} />
+      )}
     </div>
   );
 }

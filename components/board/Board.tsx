@@ -3,6 +3,7 @@
 import { useState } from 'react';
 import { AsOf } from '@/components/availability/AsOf';
 import { HoldList } from '@/components/availability/HoldList';
+import { NoUnits } from '@/components/availability/NoUnits';
 import { roomText, toWaterline } from '@/components/availability/room-words';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { LinkButton } from '@/components/ui/LinkButton';
@@ -17,9 +18,11 @@ type Dock = { id: string; name: string; timeZone: string };
 type Shown = 'ready' | 'out' | 'held';
 
 /** The dock's board: what may be launched, what is out, what is held; one tap to check out or in. */
-export function Board({ dock, first }: { dock: Dock; first: Availability }) {
+export function Board({ dock, first, mayAdd }: { dock: Dock; first: Availability; mayAdd: boolean }) {
   const { data = first, failure } = useAvailability({ dockId: dock.id }, first);
   const [shown, setShown] = useState<Shown>('ready');
+  if (data.ready.length + data.out.length + data.held.length === 0)
+    return <NoUnits title={`No unit at ${dock.name} yet`} mayAdd={mayAdd} />;
   const options = [
     { value: 'ready', label: `Ready ${data.ready.length}` },
     { value: 'out', label: `Out ${data.out.length}` },

@@ -3,6 +3,7 @@ import { AvailabilityScreen } from '@/components/availability/AvailabilityScreen
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getAvailability } from '@/lib/actions/get-availability';
 import { listDocks } from '@/lib/actions/list-docks';
+import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { QueryFrame } from '@/lib/client/QueryFrame';
 
@@ -18,7 +19,7 @@ export default async function AvailabilityPage() {
         lead="What may be hired out, what is out, and what is held: why, and what lifts it."
       />
       <QueryFrame>
-        <AvailabilityScreen docks={docks} first={first} />
+        <AvailabilityScreen docks={docks} first={first} mayAdd={may(ctx, 'unit.write')} />
       </QueryFrame>
     </>
   );

@@ -5,6 +5,7 @@ import { PageHeader } from '@/components/ui/PageHeader';
 import { SectionNav } from '@/components/ui/SectionNav';
 import { getAvailability } from '@/lib/actions/get-availability';
 import { listDocks } from '@/lib/actions/list-docks';
+import { may } from '@/lib/auth/may';
 import { orNotFound } from '@/lib/auth/page-row';
 import { pageContext } from '@/lib/auth/page';
 import { QueryFrame } from '@/lib/client/QueryFrame';
@@ -40,7 +41,7 @@ export default async function BoardPage({ searchParams }: { searchParams: Promis
         </div>
       ) : null}
       <QueryFrame key={dock.id}>
-        <Board dock={dock} first={first} />
+        <Board dock={dock} first={first} mayAdd={may(ctx, 'unit.write', dock.id)} />
       </QueryFrame>
     </>
   );

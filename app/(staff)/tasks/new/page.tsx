@@ -32,7 +32,18 @@ export default async function NewTaskPage({ searchParams }: { searchParams: Prom
           Report a defect with the check-in instead: its task opens by itself.
         </Notice>
       ) : units.length === 0 ? (
-        <EmptyState title="No units yet">A task belongs to a unit. Ask a manager to add one.</EmptyState>
+        <EmptyState
+          title="No unit yet"
+          action={
+            may(ctx, 'unit.write') ? (
+              <LinkButton kind="primary" href="/units/new">
+                Add a unit
+              </LinkButton>
+            ) : null
+          }
+        >
+          A task belongs to a unit. A manager adds the first one.
+        </EmptyState>
       ) : (
         <NewTaskForm units={units} unitId={typeof unit === 'string' ? unit : ''} />
       )}
