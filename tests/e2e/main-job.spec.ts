@@ -1,10 +1,11 @@
 import type { Browser, Page } from '@playwright/test';
+import { sql } from 'kysely';
 import { createRule } from '@/lib/actions/create-rule';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import { createRule as createRuleInput } from '@/lib/schemas/rule';
 import { asSystem, minutesAgo, openDock } from '../support/crew';
 import { expect, test, type Running } from '../support/e2e';
-import { pageOf, typeHours } from '../support/pages';
+import { expectAccessible, pageOf, typeHours } from '../support/pages';
 
 const RULE = 'Carburettor rebuild';
 /** The promise is two seconds from the moment the check-in is answered. */
@@ -86,6 +87,9 @@ test('with the worker stopped the unit is held at once, and cannot be checked ou
   test.setTimeout(120_000);
   const { unit } = await openFleet(empty);
   const { list, calendar } = await openManager(browser, empty);
+  const early = await pageOf(browser, empty, 'dock');
+  await early.goto(`/board/check-out/${unit.id}`);
+  await expect(early.getByRole('button', { name: 'Check out N-1' })).toBeVisible();
   await empty.app.worker.stop();
   await logHours(browser, empty, unit.id);
   await expect(list.getByRole('heading', { name: 'Held 1' })).toBeVisible(SOON);
@@ -94,8 +98,28 @@ test('with the worker stopped the unit is held at once, and cannot be checked ou
     SOON,
   );
 
-  const hand = await pageOf(browser, empty, 'dock');
-  await hand.goto(`/board/check-out/${unit.id}`);
-  await expect(hand.getByText(/was due at 101\.0 h/)).toBeVisible();
-  await expect(hand.getByRole('button', { name: 'Check out N-1' })).toHaveCount(0);
+  await test.step('a check-out that was open on a phone before is refused with the reason', async () => {
+    await early.getByRole('button', { name: 'Check out N-1' }).click();
+    await expect(early.getByRole('alert').filter({ hasText: 'Not checked out' })).toContainText(
+      /was due at 101\.0 h/,
+    );
+    await early.goto(`/board/check-out/${unit.id}`);
+    await expect(early.getByText(/was due at 101\.0 h/)).toBeVisible();
+    await expect(early.getByRole('button', { name: 'Check out N-1' })).toHaveCount(0);
+    expect(
+      await empty.database.db.selectFrom('outing').where('ended_at', 'is', null).select('id').execute(),
+    ).toEqual([]);
+  });
+
+  await test.step('pages that stand open say how far the worker is behind, until it is not', async () => {
+    await sql`update graphile_worker._private_jobs set run_at = run_at - interval '10 minutes'`.execute(
+      empty.database.db,
+    );
+    await expect(list.getByText('Background work is 10 minutes behind.')).toBeVisible();
+    await expect(calendar.getByText('Background work is 10 minutes behind.')).toBeVisible();
+    await expectAccessible(list);
+    empty.app.worker.start();
+    await expect(list.getByText('Background work')).toHaveCount(0, { timeout: 30_000 });
+    await expect(list.getByRole('heading', { name: 'Held 1' })).toBeVisible();
+  });
 });

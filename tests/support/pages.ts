@@ -1,5 +1,5 @@
 import AxeBuilder from '@axe-core/playwright';
-import { expect, type Browser, type Page } from '@playwright/test';
+import { expect, type Browser, type Locator, type Page } from '@playwright/test';
 import type { Role } from '@/lib/domain/access';
 import { addSignIn, PASSWORD } from './crew';
 import type { Running } from './e2e';
@@ -32,6 +32,15 @@ export async function typeHours(page: Page, number: string): Promise<void> {
     const name = key === '.' ? 'Decimal point' : key;
     await page.getByRole('button', { name, exact: true }).click();
   }
+}
+
+/** Presses Tab until what is wanted has the focus, as a hand without a mouse does. */
+export async function tabTo(page: Page, wanted: Locator, atMost = 40): Promise<void> {
+  for (let presses = 0; presses < atMost; presses += 1) {
+    await page.keyboard.press('Tab');
+    if (await wanted.evaluate((element) => element === document.activeElement)) return;
+  }
+  throw new Error(`${wanted.toString()} is not reached by ${atMost} presses of Tab`);
 }
 
 /** axe finds nothing on the page as it stands. */
