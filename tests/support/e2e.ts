@@ -11,10 +11,17 @@ export interface Running {
   database: TestDatabase;
 }
 
+/** What the operator of an empty database is asked for. */
+export const SETUP_TOKEN = 'tests-only: printed at start';
+
 async function run(template: string | undefined, use: (running: Running) => Promise<void>): Promise<void> {
   const database = await cloneDatabase(process.env.TEST_SERVER_URL ?? '', template);
   const mailbox = await startMailbox();
-  const app = await startApp({ databaseUrl: database.url, smtpUrl: mailbox.smtpUrl });
+  const app = await startApp({
+    databaseUrl: database.url,
+    smtpUrl: mailbox.smtpUrl,
+    env: { SETUP_TOKEN },
+  });
   try {
     await use({ app, mailbox, database });
   } finally {

@@ -5,24 +5,26 @@ import { addSignIn, PASSWORD } from './crew';
 import type { Running } from './e2e';
 import { signIn } from './sign-in';
 
+/** A page of a browser of its own that nobody is signed in with. */
+export async function openPage(browser: Browser, { app }: Running, width: number): Promise<Page> {
+  const context = await browser.newContext({ baseURL: app.baseUrl, viewport: { width, height: 800 } });
+  const page = await context.newPage();
+  page.setDefaultTimeout(10_000);
+  return page;
+}
+
 /** A page of somebody new of that role, signed in. */
-export async function pageOf(
-  browser: Browser,
-  { app, database }: Running,
-  role: Role,
-  width = 360,
-): Promise<Page> {
+export async function pageOf(browser: Browser, running: Running, role: Role, width = 360): Promise<Page> {
+  const { app, database } = running;
   const email = await addSignIn(database.db, role);
   const cookie = await signIn(app.baseUrl, email, PASSWORD);
-  const context = await browser.newContext({ baseURL: app.baseUrl, viewport: { width, height: 800 } });
-  await context.addCookies(
+  const page = await openPage(browser, running, width);
+  await page.context().addCookies(
     cookie.split('; ').map((pair) => {
       const at = pair.indexOf('=');
       return { name: pair.slice(0, at), value: pair.slice(at + 1), url: app.baseUrl };
     }),
   );
-  const page = await context.newPage();
-  page.setDefaultTimeout(10_000);
   return page;
 }
 
