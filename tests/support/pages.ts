@@ -47,6 +47,8 @@ export async function tabTo(page: Page, wanted: Locator, atMost = 40): Promise<v
 
 /** axe finds nothing on the page as it stands. */
 export async function expectAccessible(page: Page): Promise<void> {
+  // A new address draws its title a moment after its content.
+  await expect(page).toHaveTitle(/\S/);
   const { violations } = await new AxeBuilder({ page }).analyze();
   expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join(' ')}`)).toEqual([]);
 }
