@@ -22,14 +22,15 @@ import { toUnit } from './shape-unit';
  * has it; `unit_out` on `retired` or `dockId` while it is out; `invalid_input` on `hin` or `registration`.
  */
 export async function changeUnit(ctx: Context, id: string, input: ChangeUnit): Promise<Unit> {
-  const before = await accessUnit(ctx, id, 'unit.write');
-  if (before.retired_at) throw refuseField('id', 'The unit is retired.', 'conflict');
-  const change = await toChange(ctx, before, input);
   return refusingTaken(UNIT_TAKEN, () =>
     runTransaction(ctx.db, async (trx) => {
-      await lockUnits(trx, [before.id]);
+      await lockUnits(trx, [id]);
+      const locked = { ...ctx, db: trx };
+      const before = await accessUnit(locked, id, 'unit.write');
+      if (before.retired_at) throw refuseField('id', 'The unit is retired.', 'conflict');
+      const change = await toChange(locked, before, input);
       if (input.retired || (change.dock_id ?? before.dock_id) !== before.dock_id)
-        await refuseOut({ ...ctx, db: trx }, before, input.retired ? 'retired' : 'dockId');
+        await refuseOut(locked, before, input.retired ? 'retired' : 'dockId');
       await updateUnit(trx, before.id, change);
       if (input.retired) await enqueueRefresh(trx, [before.id]);
       else if (changesDuties(before, change)) await assessAgain(trx, [before.id]);

@@ -32,10 +32,11 @@ const LONGEST_HIRE_DAYS = 31;
  * `invalid_input` on `at`, `dueBackAt` or `dockId`; `not_found`; `forbidden` at a dock the actor does not work at.
  */
 export async function checkOut(ctx: Context, input: CreateCheckOut): Promise<CheckOut> {
-  const unit = await accessUnit(ctx, input.unitId, 'outing.write', 'unitId');
   const row = await refusingTaken({ outing_pkey: ['id', 'Another outing has this id.'] }, () =>
     runTransaction(ctx.db, async (trx) => {
-      const meter = (await lockMeters(trx, [unit.id])).get(unit.id)!;
+      const meter = (await lockMeters(trx, [input.unitId])).get(input.unitId)!;
+      // Behind the lock: whoever moves or retires the unit holds it.
+      const unit = await accessUnit({ ...ctx, db: trx }, input.unitId, 'outing.write', 'unitId');
       const first = await findOuting(trx, input.id);
       if (first) return sameUnit(first, input.unitId);
       const at = await checkFacts({ ...ctx, db: trx }, unit, meter, input);

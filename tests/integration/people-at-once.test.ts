@@ -1,16 +1,10 @@
-import { sql } from 'kysely';
 import { expect, test } from 'vitest';
 import { testDatabase } from '../support/database';
 import { testApi } from '../support/http';
+import { untilSomebodyWaits } from '../support/waiting';
 
 const database = testDatabase();
 const api = testApi(database);
-
-async function untilSomebodyWaits(): Promise<void> {
-  const waiting = sql`select 1 from pg_stat_activity
-    where datname = current_database() and wait_event_type = 'Lock'`;
-  while ((await waiting.execute(database.db)).rows.length === 0);
-}
 
 test('somebody who is renamed while they are given another role keeps that role', async () => {
   const manager = await api.caller('manager');
@@ -18,7 +12,7 @@ test('somebody who is renamed while they are given another role keeps that role'
   const role = await database.db.startTransaction().execute();
   await role.updateTable('person').set({ role: 'dock' }).where('id', '=', personId).execute();
   const renaming = manager.send('PATCH', `/people/${personId}`, { name: 'Bo Tarn' });
-  await untilSomebodyWaits();
+  await untilSomebodyWaits(database.db);
   await role.commit().execute();
   expect((await renaming).body).toMatchObject({ name: 'Bo Tarn', role: 'dock' });
 });
