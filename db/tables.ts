@@ -209,6 +209,8 @@ export interface AssessmentTable {
   wanted_revision: Generated<number>;
   assessed_revision: Generated<number>;
   assessed_at: MaybeInstant;
+  facts_hash: string | null;
+  points_hash: string | null;
 }
 
 export interface DuePointTable {

@@ -2,6 +2,7 @@ import { sql, type Kysely, type Transaction } from 'kysely';
 import type { DuePoint } from '@/lib/domain/due';
 import { toDuePoint } from '@/lib/domain/duty-standing';
 import type { DB } from '../tables';
+import { pointsHash } from './due-look';
 
 /** A due point to be stored: of a unit, under a rule, by the index of the rule's trigger. */
 export type DuePointToStore = { unitId: string; ruleId: string; triggerIndex: number; point: DuePoint };
@@ -94,18 +95,25 @@ export async function lockAssessments(trx: Transaction<DB>, unitIds: readonly st
     .execute();
 }
 
-/** Records that these units' due points are those of the locked revision. Rows that say so already stay. */
+/**
+ * Records that the stored due points of these units, whose assessments are locked, are those of the facts with these
+ * fingerprints. Rows that say so already stay.
+ */
 export async function replaceAssessments(
   trx: Transaction<DB>,
-  unitIds: readonly string[],
+  looked: readonly { id: string; factsHash: string }[],
   now: Date,
 ): Promise<void> {
-  await trx
-    .updateTable('assessment')
-    .set((eb) => ({ assessed_revision: eb.ref('wanted_revision'), assessed_at: now }))
-    .where('unit_id', '=', sql<string>`any(${[...unitIds]}::uuid[])`)
-    .whereRef('assessed_revision', '<', 'wanted_revision')
-    .execute();
+  await sql`
+    update assessment a
+       set assessed_revision = a.wanted_revision, assessed_at = ${now}, facts_hash = u.facts_hash,
+           points_hash = u.points_hash
+      from (select u.id, u.facts_hash, ${pointsHash} as points_hash
+              from unnest(${looked.map((unit) => unit.id)}::uuid[], ${looked.map((unit) => unit.factsHash)}::bigint[])
+                as u(id, facts_hash)) u
+     where a.unit_id = u.id
+       and (a.assessed_revision < a.wanted_revision or a.facts_hash is distinct from u.facts_hash
+         or a.points_hash is distinct from u.points_hash)`.execute(trx);
 }
 
 /**

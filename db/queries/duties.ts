@@ -18,14 +18,25 @@ export type WorkToOpen = {
   engines: number;
 };
 
-/** The list stands in a select of its own: PostgreSQL then has no reason to plan a prepared statement for each list. */
-const among = (column: string, unitIds: UnitIds) =>
-  unitIds === 'all' ? sql`true` : sql`${sql.ref(column)} = any((select ${[...unitIds]}::uuid[])::uuid[])`;
+/**
+ * One unit is looked up by its id, as after a check-in. A list stands in a select of its own: PostgreSQL then has no
+ * reason to plan a prepared statement for each list.
+ */
+function among(column: string, unitIds: UnitIds) {
+  if (unitIds === 'all') return sql`true`;
+  if (unitIds.length === 1) return sql`${sql.ref(column)} = ${unitIds[0]}`;
+  return sql`${sql.ref(column)} = any((select ${[...unitIds]}::uuid[])::uuid[])`;
+}
 
-/** Whether a due point `p` is upcoming or worse, by live meter `m` and the local day at dock `d`. */
-const withinLead = (now: Date) => sql`(m.engine_hours_tenths >= p.upcoming_from_tenths
-  or m.outing_count >= p.upcoming_from_outings
-  or (${now}::timestamptz at time zone d.time_zone)::date >= p.upcoming_from_on)`;
+/** Units in service with where their meters and days stand; a list of one is looked up, of all is read through. */
+const fleet = (unitIds: UnitIds, now: Date) => sql`
+    select u.id, m.engine_hours_tenths, m.outing_count, (${now}::timestamptz at time zone d.time_zone)::date as today,
+           coalesce(u.carb_count_override, o.carb_count) as carb_count, o.engines
+      from unit u
+      join model o on o.id = u.model_id
+      join dock d on d.id = u.dock_id
+      join live_meter m on m.unit_id = u.id
+     where u.retired_at is null and ${among('u.id', unitIds)}`;
 
 /**
  * Withdraws the rules' tasks that nobody has begun, planned or written on and that are no longer within their lead;
@@ -34,24 +45,35 @@ const withinLead = (now: Date) => sql`(m.engine_hours_tenths >= p.upcoming_from_
  */
 export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): Promise<WorkToOpen[]> {
   const { rows } = await sql<WorkToOpen>`
-    with withdrawn as (${withdrawNoLongerDue(unitIds, now)})
-    select distinct p.unit_id, r.kind, r.name as title, null as detail, p.rule_id, null::uuid as defect_id, r.labour,
-           coalesce(u.carb_count_override, o.carb_count) as carb_count, o.engines
-      from due_point p
-      join unit u on u.id = p.unit_id and u.retired_at is null
-      join model o on o.id = u.model_id
-      join dock d on d.id = u.dock_id
-      join live_meter m on m.unit_id = u.id
-      join rule r on r.id = p.rule_id and r.ended_at is null
-     where ${among('p.unit_id', unitIds)} and ${withinLead(now)}
-       and not exists (select 1 from task t
-         where t.unit_id = p.unit_id and t.rule_id = p.rule_id and t.ended_at is null)
+    with fleet as materialized (${fleet(unitIds, now)}),
+    within_lead as materialized (
+      select distinct p.unit_id, p.rule_id
+        from fleet f
+        join due_point p on p.unit_id = f.id
+        join rule r on r.id = p.rule_id and r.ended_at is null
+       where f.engine_hours_tenths >= p.upcoming_from_tenths
+          or f.outing_count >= p.upcoming_from_outings
+          or f.today >= p.upcoming_from_on),
+    withdrawn as (
+      update task t set ended_at = ${now}, withdraw_reason = 'No longer due.', revision = t.revision + 1
+       where t.ended_at is null and t.origin = 'rule' and t.started_at is null and t.planned_on is null
+         and ${among('t.unit_id', unitIds)}
+         and not exists (select 1 from task_note n where n.task_id = t.id)
+         and not exists (select 1 from within_lead w where w.unit_id = t.unit_id and w.rule_id = t.rule_id))
+    select w.unit_id, r.kind, r.name as title, null as detail, w.rule_id, null::uuid as defect_id, r.labour,
+           f.carb_count, f.engines
+      from within_lead w
+      join fleet f on f.id = w.unit_id
+      join rule r on r.id = w.rule_id
+     where not exists (select 1 from task t
+         where t.unit_id = w.unit_id and t.rule_id = w.rule_id and t.ended_at is null)
     union all
-    select f.unit_id, 'repair', f.title, f.detail, null, f.id, null, 0, 0
-      from defect f
-      join unit u on u.id = f.unit_id and u.retired_at is null
-     where f.cleared_at is null and ${among('f.unit_id', unitIds)}
-       and not exists (select 1 from task t where t.defect_id = f.id) /* prepared */`.execute(db);
+    select d.unit_id, 'repair', d.title, d.detail, null, d.id, null, 0, 0
+      from defect d
+      join fleet f on f.id = d.unit_id
+     where d.cleared_at is null and not exists (select 1 from task t where t.defect_id = d.id) /* prepared */`.execute(
+    db,
+  );
   return rows;
 }
 
@@ -64,16 +86,3 @@ export async function insertTasks(db: Kysely<DB>, rows: Insertable<TaskTable>[])
       .onConflict((oc) => oc.doNothing())
       .execute();
 }
-
-const withdrawNoLongerDue = (unitIds: UnitIds, now: Date) => sql`
-    update task t set ended_at = ${now}, withdraw_reason = 'No longer due.', revision = t.revision + 1
-     where t.ended_at is null and t.origin = 'rule' and t.started_at is null and t.planned_on is null
-       and ${among('t.unit_id', unitIds)}
-       and not exists (select 1 from task_note n where n.task_id = t.id)
-       and not exists (
-         select 1 from due_point p
-           join unit u on u.id = p.unit_id
-           join dock d on d.id = u.dock_id
-           join live_meter m on m.unit_id = u.id
-           join rule r on r.id = p.rule_id and r.ended_at is null
-          where p.unit_id = t.unit_id and p.rule_id = t.rule_id and ${withinLead(now)})`;

@@ -4,7 +4,7 @@ import { describe, expect, test } from 'vitest';
 import { recountLiveMeter } from '@/db/queries/readings';
 import { runTransaction } from '@/db/transaction';
 import { getAvailability } from '@/lib/actions/get-availability';
-import { refreshDue } from '@/lib/actions/refresh-due';
+import { correctDuePoints } from '@/lib/actions/correct-due-points';
 import { asSystem } from '../support/crew';
 import { testDatabase } from '../support/database';
 import { anyHistory, KINDS, live, openFleet, type Fleet } from '../support/random-history';
@@ -40,7 +40,7 @@ async function deriveAnew(fleet: Fleet, now: Date): Promise<number> {
       await recountLiveMeter(trx, unitId);
     }
   });
-  return refreshDue(asSystem(db, now), { unitIds });
+  return correctDuePoints(asSystem(db, now), unitIds);
 }
 
 /** Takes every fact out and puts it back in another order. */
@@ -79,7 +79,7 @@ describe('whatever happens to a fleet in 200 steps', () => {
       const [points, meters] = [await readPoints(fleet), await readMeters(fleet)];
       expect(points.length).toBeGreaterThan(2);
 
-      expect(await refreshDue(asSystem(database.db, now), { unitIds: fleet.unitIds })).toBe(0);
+      expect(await correctDuePoints(asSystem(database.db, now), fleet.unitIds)).toBe(0);
       expect(await readPoints(fleet)).toEqual(points);
 
       expect(await deriveAnew(fleet, now)).toBe(points.length);

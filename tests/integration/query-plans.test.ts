@@ -9,6 +9,7 @@ import { getAvailability } from '@/lib/actions/get-availability';
 import { getCalendar } from '@/lib/actions/get-calendar';
 import { listHistory } from '@/lib/actions/list-history';
 import { openTasks } from '@/lib/actions/open-tasks';
+import { correctDuePoints } from '@/lib/actions/correct-due-points';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import { refreshFleet } from '@/lib/actions/refresh-fleet';
 import { sessionCookieName } from '@/lib/auth/cookies';
@@ -100,7 +101,7 @@ describe('of one unit or one session, no large table is read through', () => {
       'by the refresh of a unit whose due points are wrong',
       async () => {
         await sql`delete from due_point where unit_id = ${unitId}`.execute(database.db);
-        expect(await refreshDue(ctx(), { unitIds: [unitId] })).toBeGreaterThan(0);
+        expect(await correctDuePoints(ctx(), [unitId])).toBeGreaterThan(0);
       },
     ],
     ['by the history of a unit', () => listHistory(ctx(), unitId, {})],
@@ -114,7 +115,7 @@ describe('of the whole fleet, no reading, outing or session is read through', ()
     ['by availability', () => getAvailability(ctx(), { hours: 2 })],
     ['by a calendar month', () => getCalendar(ctx(), { from: '2026-06-15', to: '2026-07-15' })],
     ['by the opening of tasks', () => openTasks(ctx(), 'all')],
-    ['by the refresh of a batch', async () => refreshFleet(ctx())],
+    ['by the refresh of the fleet', () => refreshFleet(ctx(), { thorough: true })],
   ])('%s', async (_, work) => {
     expect(await scansOf(work, HISTORY)).toEqual([]);
   });
