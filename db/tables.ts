@@ -335,6 +335,7 @@ export interface MailTable {
   kind: string;
   recipient: string;
   subject: string;
+  /** Empty once the letter is sent or failed for good, as `html_body` is null. */
   text_body: string;
   html_body: string | null;
   headers: DefaultJson<Record<string, string>>;

@@ -57,21 +57,26 @@ export function findMail(db: Kysely<DB>, mailId: string): Promise<MailRow | unde
   return db.selectFrom('mail').selectAll().where('id', '=', mailId).executeTakeFirst();
 }
 
-/** Records that the server took the letter, on the digest it carries too. The first time stays. */
+/**
+ * Records that the server took the letter, on the digest it carries too, and forgets what it said: it may carry a
+ * link that lets somebody in. The first time stays.
+ */
 export async function insertMailSent(db: Kysely<DB>, mailId: string, now: Date): Promise<void> {
   await sql`
-    with sent as (update mail set sent_at = ${now} where id = ${mailId} and sent_at is null returning id)
+    with sent as (
+      update mail set sent_at = ${now}, text_body = '', html_body = null
+       where id = ${mailId} and sent_at is null returning id)
     update digest set sent_at = ${now} from sent where digest.mail_id = sent.id`.execute(db);
 }
 
-/** Records that the letter will never be sent, and why, on the digest it carries too. */
+/** Records that the letter will never be sent, and why, on the digest it carries too, and forgets what it said. */
 export async function insertMailFailure(
   db: Kysely<DB>,
   { mailId, claimId, why }: { mailId: string; claimId: string; why: string },
 ): Promise<void> {
   await sql`
     with failed as (
-      update mail set failure = ${why}
+      update mail set failure = ${why}, text_body = '', html_body = null
        where id = ${mailId} and claim_id = ${claimId} and sent_at is null and failure is null returning id)
     update digest set failure = ${why} from failed where digest.mail_id = failed.id`.execute(db);
 }

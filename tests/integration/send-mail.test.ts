@@ -62,6 +62,30 @@ test('a letter arrives once, with text, HTML and a Message-ID made from its row'
   expect(server.taken).toHaveLength(1);
 });
 
+test.each([
+  ['is sent', {}],
+  ['will never be', { recipient: (go: (error: Error) => void) => go(refusal(550, 'no such mailbox')) }],
+])('what a letter said is forgotten once it %s; what it was stays', async (_, behaviour) => {
+  const link = 'https://dock.example/reset/x';
+  const id = await queueMail(
+    { db: database.db, now: new Date() },
+    { kind: 'password-reset', to: 'm@wakewright.example', subject: 'Choose', text: link, html: link },
+  );
+  const row = () => database.db.selectFrom('mail').selectAll().where('id', '=', id).executeTakeFirstOrThrow();
+  expect(await row()).toMatchObject({ text_body: link, html_body: link });
+  server.behave(behaviour);
+  await startWorkers(1);
+  await expect
+    .poll(async () => (await row()).sent_at ?? (await row()).failure, { timeout: 10_000 })
+    .not.toBeNull();
+  expect(await row()).toMatchObject({
+    kind: 'password-reset',
+    subject: 'Choose',
+    text_body: '',
+    html_body: null,
+  });
+});
+
 test('a letter that is sent is not sent again when its job runs twice', async () => {
   await startWorkers(1);
   const id = await queue();
