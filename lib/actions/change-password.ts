@@ -1,3 +1,4 @@
+import { usePasswordResetsUp } from '@/db/queries/password-resets';
 import { changePerson, findCredential } from '@/db/queries/people';
 import { renewSession } from '@/db/queries/sessions';
 import { markAttemptSucceeded } from '@/db/queries/sign-in-attempts';
@@ -12,9 +13,9 @@ import { reserveAttempt } from './reserve-attempt';
 import { tellPasswordChanged } from './tell-password-changed';
 
 /**
- * Changes one's own password; every other session ends. Guesses at the present one are counted as those of a
- * sign-in are, for this person alone. Throws `invalid_input` on `currentPassword` or `newPassword`, `forbidden` for an API key,
- * `too_many_attempts`.
+ * Changes one's own password; every other session ends and every link for a new one works no more. Guesses at the
+ * present one are counted as those of a sign-in are, for this person alone. Throws `invalid_input` on
+ * `currentPassword` or `newPassword`, `forbidden` for an API key, `too_many_attempts`.
  */
 export async function changePassword(
   ctx: Context,
@@ -31,6 +32,7 @@ export async function changePassword(
   const passwordHash = await hashPassword(input.newPassword);
   await runTransaction(ctx.db, async (trx) => {
     await markAttemptSucceeded(trx, attemptId);
+    await usePasswordResetsUp(trx, self.personId, ctx.now);
     const changed = await changePerson(
       trx,
       self.personId,
