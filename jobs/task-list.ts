@@ -5,6 +5,7 @@ import { run as refreshDue } from './tasks/refresh-due';
 import { run as refreshFleet } from './tasks/refresh-fleet';
 import { run as sendDigest } from './tasks/send-digest';
 import { run as sendMail } from './tasks/send-mail';
+import { run as sendPasswordReset } from './tasks/send-password-reset';
 import { run as tickDigests } from './tasks/tick-digests';
 import { run as tidy } from './tasks/tidy';
 
@@ -14,6 +15,7 @@ export const TASKS: Record<JobName, JobRun> = {
   'refresh-fleet': refreshFleet,
   'open-tasks': openTasks,
   'send-mail': sendMail,
+  'send-password-reset': sendPasswordReset,
   'tick-digests': tickDigests,
   'send-digest': sendDigest,
   tidy,

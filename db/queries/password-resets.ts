@@ -12,13 +12,20 @@ export async function countPasswordResets(db: Kysely<DB>, personId: string, sinc
   return asked;
 }
 
+/** The reset of this id, used or not. */
+export function findPasswordResetById(db: Kysely<DB>, id: string): Promise<{ id: string } | undefined> {
+  return db.selectFrom('password_reset').select('id').where('id', '=', id).executeTakeFirst();
+}
+
+/** Stores that the person may choose a new password until `expiresAt`; of the token its hash alone. */
 export async function insertPasswordReset(
   db: Kysely<DB>,
-  row: { personId: string; tokenHash: Buffer; now: Date; expiresAt: Date },
+  row: { id: string; personId: string; tokenHash: Buffer; now: Date; expiresAt: Date },
 ): Promise<void> {
   await db
     .insertInto('password_reset')
     .values({
+      id: row.id,
       person_id: row.personId,
       token_hash: row.tokenHash,
       asked_at: row.now,

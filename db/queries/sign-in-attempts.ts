@@ -56,6 +56,7 @@ export async function insertAttempt(db: Kysely<DB>, keys: AttemptKeys, now: Date
   return id;
 }
 
+/** Takes an attempt back out of what is counted as wrong. */
 export async function markAttemptSucceeded(db: Kysely<DB>, id: number): Promise<void> {
   await db.updateTable('sign_in_attempt').set({ succeeded: true }).where('id', '=', id).execute();
 }

@@ -1,42 +1,18 @@
-import { countPasswordResets, insertPasswordReset } from '@/db/queries/password-resets';
-import { findCredentialByEmail, lockPerson } from '@/db/queries/people';
-import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
+import { enqueue } from '@/lib/enqueue';
 import type { AskPasswordReset } from '@/lib/schemas/password-reset';
-import { linkTo } from '@/lib/links';
-import { makeToken } from '@/lib/secrets/one-time-token';
-import { queueMail } from './queue-mail';
-import { instantInWords, writeLetter } from './write-letter';
-
-const HOUR_MS = 3_600_000;
-/** Letters a person is sent within an hour, however often somebody asks. */
-const LETTERS_AN_HOUR = 3;
+import { reserveAttempt } from './reserve-attempt';
 
 /**
- * Sends a link for choosing a new password, good for one hour and one use, when somebody has this e-mail address.
- * Answers nothing either way: nobody learns who is here.
+ * Has a link for choosing a new password sent, when somebody has this e-mail address. Answers nothing either way,
+ * by the same steps and in the same time: the worker looks who it is, so nobody learns who is here. Throws
+ * `too_many_attempts` with the time to wait, counted by e-mail address, known or not, and by network address.
  */
-export async function askPasswordReset(ctx: Context, { email }: AskPasswordReset): Promise<void> {
-  const person = await findCredentialByEmail(ctx.db, email);
-  const { token, hash } = makeToken();
-  if (!person || person.deactivated_at) return;
-  const since = new Date(ctx.now.getTime() - HOUR_MS);
-  const expiresAt = new Date(ctx.now.getTime() + HOUR_MS);
-  await runTransaction(ctx.db, async (trx) => {
-    await lockPerson(trx, person.id);
-    if ((await countPasswordResets(trx, person.id, since)) >= LETTERS_AN_HOUR) return;
-    await insertPasswordReset(trx, { personId: person.id, tokenHash: hash, now: ctx.now, expiresAt });
-    const letter = writeLetter({
-      kind: 'password-reset',
-      to: person.email,
-      subject: 'Choose a new password for Wakewright',
-      before: ['Somebody asked for a new password for this e-mail address.'],
-      link: { label: 'Choose a new password', href: linkTo(`/reset/${token}`) },
-      after: [
-        `The link works once, until ${instantInWords(expiresAt)}. It ends every session of yours.`,
-        'If it was not you, do nothing: your password stays as it is.',
-      ],
-    });
-    await queueMail({ ...ctx, db: trx }, letter);
-  });
+export async function askPasswordReset(
+  ctx: Context,
+  { email, address }: AskPasswordReset & { address: string },
+): Promise<void> {
+  const account = `new password of ${email.toLowerCase()}`;
+  await reserveAttempt(ctx, { account, address, deviceId: null, at: 'reset' });
+  await enqueue(ctx.db, 'send-password-reset', { id: crypto.randomUUID(), email });
 }

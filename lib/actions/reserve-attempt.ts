@@ -16,19 +16,31 @@ import {
 import { Refusal } from '@/lib/errors';
 import { privateKey } from '@/lib/secrets/private-key';
 
-/** Whose password is tried, from where, and on which known device, if any. */
-export type Attempt = { account: string; address: string; deviceId: string | null };
+/** Whose password is tried, from where, and on which known device, if any; or whose is asked for anew. */
+export type Attempt = {
+  account: string;
+  address: string;
+  deviceId: string | null;
+  at?: keyof typeof COUNTERS;
+};
+
+/** Each counts the attempts from an address by itself: letters that somebody asks for keep nobody from signing in. */
+const COUNTERS = {
+  password: { prefix: '', refused: 'Too many wrong attempts.' },
+  reset: { prefix: 'reset ', refused: 'Too many links were asked for.' },
+} as const;
 
 /**
- * Takes one attempt at a password, counted as wrong until `markAttemptSucceeded` says otherwise: so many sent at
+ * Takes one attempt at a password, or one asking for a new one, counted as wrong until `markAttemptSucceeded` says otherwise: so many sent at
  * once cannot slip past the count. Answers the attempt's id. Throws `too_many_attempts` with the time to wait, and
  * then counts nothing: hammering does not lengthen the wait. Only a hash of `account` is kept, for people type
  * passwords into the wrong field.
  */
 export async function reserveAttempt(ctx: Context, attempt: Attempt): Promise<number> {
+  const counter = COUNTERS[attempt.at ?? 'password'];
   const keys: AttemptKeys = {
     emailKey: privateKey(attempt.account),
-    address: countedAddress(attempt.address),
+    address: counter.prefix + countedAddress(attempt.address),
     deviceId: attempt.deviceId,
   };
   const since = new Date(ctx.now.getTime() - ATTEMPT_MATTERS_MS);
@@ -40,14 +52,14 @@ export async function reserveAttempt(ctx: Context, attempt: Attempt): Promise<nu
       computeWaitMs(SIGN_IN_LADDERS.address, failures.address, ctx.now),
       computeWaitMs(SIGN_IN_LADDERS.device, failures.device, ctx.now),
     );
-    if (waitMs > 0) throw tooMany(Math.ceil(waitMs / 1000));
+    if (waitMs > 0) throw tooMany(counter.refused, Math.ceil(waitMs / 1000));
     await deleteOldAttempts(trx, keys, since);
     return insertAttempt(trx, keys, ctx.now);
   });
 }
 
-function tooMany(seconds: number): Refusal {
+function tooMany(refused: string, seconds: number): Refusal {
   const wait =
     seconds < 120 ? `${seconds} second${seconds === 1 ? '' : 's'}` : `${Math.ceil(seconds / 60)} minutes`;
-  return new Refusal('too_many_attempts', `Too many wrong attempts. Try again in ${wait}.`, [], seconds);
+  return new Refusal('too_many_attempts', `${refused} Try again in ${wait}.`, [], seconds);
 }

@@ -6,6 +6,7 @@ export const jobs = {
   'refresh-fleet': z.object({}),
   'open-tasks': z.object({}),
   'send-mail': z.object({ mailId: z.uuid() }),
+  'send-password-reset': z.object({ id: z.uuid(), email: z.string() }),
   'tick-digests': z.object({}),
   'send-digest': z.object({ personId: z.uuid(), weekOn: z.iso.date() }),
   tidy: z.object({}),

@@ -5,7 +5,8 @@ import { startApp, type App } from '../support/app';
 import { openBrowser, sendFrom, type Browser } from '../support/browser';
 import { addDock } from '../support/craft';
 import { testDatabase } from '../support/database';
-import { addStaff, PASSWORD, tokenInLetter } from '../support/people';
+import { addStaff, PASSWORD, sendAskedResets, tokenInLetter } from '../support/people';
+import { setEnvironment } from '../support/worker';
 
 const database = testDatabase();
 let app: App;
@@ -18,6 +19,7 @@ beforeAll(async () => {
 }, 300_000);
 afterAll(() => app.stop());
 beforeEach(async () => {
+  setEnvironment(database.url);
   ada = await addStaff(database.db, 'Ada', 'manager');
   marlo = await addStaff(database.db, 'Marlo', 'mechanic');
   north = await addDock(database.db, 'North dock');
@@ -141,7 +143,11 @@ describe('an invitation', () => {
 });
 
 describe('a forgotten password', () => {
-  const ask = (email: string) => sendFrom(visitor(), 'POST', '/password-resets', { email });
+  const ask = async (email: string) => {
+    const answer = await sendFrom(visitor(), 'POST', '/password-resets', { email });
+    await sendAskedResets(database.db);
+    return answer;
+  };
 
   test('is replaced by a link that works once and ends every session', async () => {
     const before = await signedIn(marlo!.email);

@@ -80,6 +80,7 @@ test('each job run twice changes nothing the second time', async () => {
     ['refresh-due', { unitIds: [unitId] }],
     ['refresh-fleet', {}],
     ['open-tasks', {}],
+    ['send-password-reset', { id: '6f1d0a3e-5b64-4f0e-9a57-0d9be2f6f001', email: 'm@wakewright.example' }],
     ['tick-digests', {}],
     ['send-digest', { personId, weekOn: '2026-11-30' }],
     ['tidy', {}],

@@ -1,7 +1,9 @@
-import type { Kysely } from 'kysely';
+import { sql, type Kysely } from 'kysely';
 import { createPerson } from '@/lib/actions/create-person';
+import { sendPasswordReset } from '@/lib/actions/send-password-reset';
 import { SYSTEM, type Role } from '@/lib/domain/access';
 import type { DB } from '@/db/tables';
+import { jobs } from '@/lib/schemas/jobs';
 import type { Person } from '@/lib/schemas/person';
 
 /** What everybody in the tests signs in with. */
@@ -24,6 +26,18 @@ export async function addStaff(
     { db, actor: SYSTEM, now: new Date() },
     { name, email, role, dockIds, password: PASSWORD },
   );
+}
+
+/** Does what the worker would about the links for a new password that were asked for, where no worker runs. */
+export async function sendAskedResets(db: Kysely<DB>, now = new Date()): Promise<void> {
+  const { rows } = await sql<{ id: string; payload: unknown }>`
+    select job.id, job.payload from graphile_worker._private_jobs job
+      join graphile_worker._private_tasks task on task.id = job.task_id
+     where task.identifier = 'send-password-reset' order by job.id`.execute(db);
+  for (const { id, payload } of rows) {
+    await sendPasswordReset({ db, actor: SYSTEM, now }, jobs['send-password-reset'].parse(payload));
+    await sql`select graphile_worker.complete_jobs(array[${id}::bigint])`.execute(db);
+  }
 }
 
 /** The token of the link in the newest letter of this kind to this address. */
