@@ -20,6 +20,7 @@ export function findInvitationByToken(
   return open(db).where('token_hash', '=', tokenHash).where('expires_at', '>', now).executeTakeFirst();
 }
 
+/** Stores an invitation; of its token the hash alone. */
 export function insertInvitation(db: Kysely<DB>, row: Insertable<InvitationTable>): Promise<InvitationRow> {
   return db.insertInto('invitation').values(row).returningAll().executeTakeFirstOrThrow();
 }
@@ -68,6 +69,17 @@ export async function withdrawInvitation(db: Kysely<DB>, id: string, now: Date):
     .returning('id')
     .executeTakeFirst();
   return row !== undefined;
+}
+
+/** Withdraws every open invitation that this person sent. */
+export async function withdrawInvitationsOf(db: Kysely<DB>, personId: string, now: Date): Promise<void> {
+  await db
+    .updateTable('invitation')
+    .set({ withdrawn_at: now })
+    .where('invited_by', '=', personId)
+    .where('accepted_at', 'is', null)
+    .where('withdrawn_at', 'is', null)
+    .execute();
 }
 
 function open(db: Kysely<DB>) {

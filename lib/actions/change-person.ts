@@ -1,3 +1,4 @@
+import { withdrawInvitationsOf } from '@/db/queries/invitations';
 import { changePerson as changePersonRow, lockManagersOfAllDocks } from '@/db/queries/people';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
@@ -9,8 +10,8 @@ import { toPerson } from './shape-person';
 
 /**
  * Changes a person's name, role or docks. Managers of all docks only. Another role or other docks end the
- * person's sessions. Throws `not_found` on `id` or a dock, `conflict` on `role` or `dockIds` for the last
- * manager of all docks.
+ * person's sessions; whoever may no longer invite has the invitations they sent withdrawn. Throws `not_found` on
+ * `id` or a dock, `conflict` on `role` or `dockIds` for the last manager of all docks.
  */
 export async function changePerson(
   ctx: Context,
@@ -26,7 +27,10 @@ export async function changePerson(
     const dockIds = [...new Set(input.dockIds ?? before.dock_ids)];
     const moves = role !== before.role || !sameDocks(dockIds, before.dock_ids);
     const staysManagerOfAll = role === 'manager' && dockIds.length === 0;
-    if (!staysManagerOfAll) await keepAManager(trx, id, role === 'manager' ? 'dockIds' : 'role');
+    if (!staysManagerOfAll) {
+      await keepAManager(trx, id, role === 'manager' ? 'dockIds' : 'role');
+      await withdrawInvitationsOf(trx, id, ctx.now);
+    }
     const change = {
       ...(input.name !== undefined && { name: input.name }),
       ...(input.role !== undefined && { role }),
