@@ -1,5 +1,5 @@
 /** Why a unit may not be hired out, what lifts that, and how much is left before it happens. */
-import { addDays, daysBetween } from './calendar-day';
+import { addDays } from './calendar-day';
 import type { DuePoint, Standing } from './due';
 import { formatTenths } from './meter';
 import { countOf, describeDay } from './words';
@@ -74,14 +74,15 @@ export function describeLift(hold: Pick<Hold, 'reason'> & { ruleName?: string | 
   }
 }
 
-/** A due point of a rule that holds its unit. */
-export type HoldingPoint = { ruleId: string; point: DuePoint };
 /** What a unit runs in a day, for setting hours and outings against days. */
 export type Pace = { tenthsPerDay: number; outingsPerDay: number };
 /** Taken where nothing is known of a unit's use: five hours, or five outings, in three days. */
 export const USUAL_PACE: Pace = { tenthsPerDay: 50 / 3, outingsPerDay: 5 / 3 };
 
-/** What is left by each measure, with the rule that holds first by it. */
+/**
+ * What is left before the next hold by each measure, with the rule that holds first by it; null where nothing counts
+ * by it, 0 or less when the unit is held by it now. `unit_room` in SQL measures it.
+ */
 export type RoomByMeasure = {
   tenths: number | null;
   hoursRuleId: string | null;
@@ -101,53 +102,4 @@ export function findNearestRule(room: RoomByMeasure, pace: Pace = USUAL_PACE): s
     { days: inDays(room.days, 1), ruleId: room.daysRuleId },
   ];
   return choices.reduce((nearest, choice) => (choice.days < nearest.days ? choice : nearest)).ruleId;
-}
-
-/**
- * What is left before the next hold by each measure, null where nothing counts by it; 0 or less when the unit
- * is held by it now. `ruleId` is the rule that holds first.
- */
-export type Room = {
-  tenthsToHold: number | null;
-  outingsToHold: number | null;
-  daysToHold: number | null;
-  ruleId: string | null;
-};
-
-type Left = { on: DuePoint['on']; left: number; ruleId: string };
-
-function measureLeft({ ruleId, point }: HoldingPoint, standing: Standing): Left {
-  switch (point.on) {
-    case 'engine_hours':
-      return { on: point.on, left: point.overdueFromTenths - standing.engineHoursTenths, ruleId };
-    case 'outings':
-      return { on: point.on, left: point.overdueFromOutings - standing.outings, ruleId };
-    case 'calendar':
-      return { on: point.on, left: daysBetween(standing.today, point.overdueFromOn), ruleId };
-  }
-}
-
-/** How far a unit is from its next hold, over the due points of the rules that hold it. */
-export function computeRoom(
-  points: readonly HoldingPoint[],
-  standing: Standing,
-  pace: Pace = USUAL_PACE,
-): Room {
-  const all = points.map((point) => measureLeft(point, standing)).sort((a, b) => a.left - b.left);
-  const least = (on: DuePoint['on']) => all.find((one) => one.on === on);
-  const [hours, outings, days] = [least('engine_hours'), least('outings'), least('calendar')];
-  const room: RoomByMeasure = {
-    tenths: hours?.left ?? null,
-    hoursRuleId: hours?.ruleId ?? null,
-    outings: outings?.left ?? null,
-    outingsRuleId: outings?.ruleId ?? null,
-    days: days?.left ?? null,
-    daysRuleId: days?.ruleId ?? null,
-  };
-  return {
-    tenthsToHold: room.tenths,
-    outingsToHold: room.outings,
-    daysToHold: room.days,
-    ruleId: findNearestRule(room, pace),
-  };
 }

@@ -1,7 +1,6 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { type DuePoint, computeState } from '@/lib/domain/due';
-import { type HoldingPoint, computeRoom, describeHold, describeLift } from '@/lib/domain/readiness';
+import type { DuePoint } from '@/lib/domain/due';
+import { describeHold, describeLift, findNearestRule } from '@/lib/domain/readiness';
 
 const standing = { engineHoursTenths: 6612, outings: 41, today: '2026-07-04' };
 const hoursPoint = (dueTenths: number, late = 0): DuePoint => ({
@@ -63,61 +62,41 @@ describe('a hold in words', () => {
 });
 
 // Worked by hand; the usual pace is five hours, or five outings, in three days.
-describe('room before the next hold', () => {
-  it('is none by any measure for a unit that no rule holds', () => {
-    expect(computeRoom([], standing)).toEqual({
-      tenthsToHold: null,
-      outingsToHold: null,
-      daysToHold: null,
-      ruleId: null,
-    });
+describe('the rule that holds a unit first', () => {
+  const none = {
+    tenths: null,
+    hoursRuleId: null,
+    outings: null,
+    outingsRuleId: null,
+    days: null,
+    daysRuleId: null,
+  };
+  const room = {
+    tenths: 88,
+    hoursRuleId: 'fifty hours',
+    outings: 39,
+    outingsRuleId: 'forty outings',
+    days: 2,
+    daysRuleId: 'yearly',
+  };
+
+  it('is none for a unit that no rule holds', () => {
+    expect(findNearestRule(none)).toBeNull();
   });
 
-  it('is the least by each measure, and names the rule that holds first', () => {
-    const points: HoldingPoint[] = [
-      { ruleId: 'hundred hours', point: hoursPoint(6800, 100) },
-      { ruleId: 'fifty hours', point: hoursPoint(6700) },
-      { ruleId: 'yearly', point: dayPoint('2026-07-04', '2026-07-06') },
-      { ruleId: 'forty outings', point: outingsPoint(80) },
-    ];
+  it('is the one with the fewest days left, hours and outings turned into days at the unit’s pace', () => {
     // 8.8 h are 5.3 days, 39 outings are 23 days, and the yearly check holds in 2 days.
-    expect(computeRoom(points, standing)).toEqual({
-      tenthsToHold: 88,
-      outingsToHold: 39,
-      daysToHold: 2,
-      ruleId: 'yearly',
-    });
+    expect(findNearestRule(room)).toBe('yearly');
     // At 8.0 h a day the 8.8 h are gone first.
-    expect(computeRoom(points, standing, { tenthsPerDay: 80, outingsPerDay: 3 }).ruleId).toBe('fifty hours');
+    expect(findNearestRule(room, { tenthsPerDay: 80, outingsPerDay: 3 })).toBe('fifty hours');
   });
 
-  it('is negative by how far a unit is past, and names the rule it is furthest past', () => {
-    const points: HoldingPoint[] = [
-      { ruleId: 'hundred hours', point: hoursPoint(6500, 100) },
-      { ruleId: 'yearly', point: dayPoint('2026-06-01', '2026-06-02') },
-    ];
-    expect(computeRoom(points, standing)).toMatchObject({
-      tenthsToHold: -12,
-      daysToHold: -32,
-      ruleId: 'yearly',
-    });
+  it('is the one it is furthest past', () => {
+    expect(findNearestRule({ ...room, tenths: -12, days: -32 })).toBe('yearly');
   });
 
-  it('still names the rule for a unit that is never used', () => {
-    const room = computeRoom([{ ruleId: 'fifty hours', point: hoursPoint(6700) }], standing, {
-      tenthsPerDay: 0,
-      outingsPerDay: 0,
-    });
-    expect(room.ruleId).toBe('fifty hours');
-  });
-
-  it('is used up exactly when the unit is overdue', () => {
-    fc.assert(
-      fc.property(fc.integer({ min: 6000, max: 7200 }), fc.nat(100), (dueTenths, late) => {
-        const point = hoursPoint(dueTenths, late);
-        const { tenthsToHold } = computeRoom([{ ruleId: 'fifty hours', point }], standing);
-        expect(tenthsToHold! <= 0).toBe(computeState(point, standing) === 'overdue');
-      }),
-    );
+  it('is named for a unit that is never used', () => {
+    const left = { ...none, tenths: 88, hoursRuleId: 'fifty hours' };
+    expect(findNearestRule(left, { tenthsPerDay: 0, outingsPerDay: 0 })).toBe('fifty hours');
   });
 });
