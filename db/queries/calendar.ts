@@ -3,6 +3,7 @@ import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { Window } from '@/lib/domain/rule';
 import type { DB, TaskTable } from '../tables';
+import { hasReached, localDayAt } from './due-state';
 
 type Range = { dockIds: 'all' | readonly string[]; from: CalendarDay; to: CalendarDay };
 
@@ -44,8 +45,7 @@ export async function listOpenWork(
   options: { now: Date; nearest: number; pace: { tenthsPerDay: number; outingsPerDay: number } },
 ): Promise<OpenWorkRow[]> {
   const { now, nearest, pace } = options;
-  const due = sql`(m.engine_hours_tenths >= p.due_tenths or m.outing_count >= p.due_outings
-    or (${now}::timestamptz at time zone d.time_zone)::date >= p.due_on)`;
+  const due = hasReached('due', { meter: 'm', today: localDayAt(now) });
   const { rows } = await sql<OpenWorkRow>`
     with work as (
       select t.id as task_id, t.unit_id, t.rule_id

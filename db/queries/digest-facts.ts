@@ -1,7 +1,8 @@
 import { sql, type Kysely } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
+import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { DB } from '../tables';
-import type { StoredPoint } from './readiness';
+import { localDayAt } from './due-state';
 
 type At = { dock_id: string; unit_id: string; fleet_number: string };
 type Docks = readonly string[];
@@ -14,7 +15,7 @@ export type StoredDuty = At & {
   outing_count: number;
   ran_tenths: number;
   ran_outings: number;
-  points: StoredPoint[];
+  points: DuePointColumns[];
 };
 
 /**
@@ -25,7 +26,7 @@ export async function listNearDuties(db: Kysely<DB>, dockIds: Docks, now: Date):
   const { rows } = await sql<StoredDuty>`
     with fleet as (
       select u.id, u.dock_id, u.fleet_number, m.engine_hours_tenths, m.outing_count,
-             (${now}::timestamptz at time zone d.time_zone)::date as today,
+             ${localDayAt(now)} as today,
              m.engine_hours_tenths - coalesce(
                (select r.engine_hours_tenths from reading r
                  where r.unit_id = u.id and r.voided_at is null and r.taken_at <= ${now}::timestamptz - interval '28 days'

@@ -1,6 +1,7 @@
 import { sql, type Insertable, type Kysely } from 'kysely';
 import type { Labour } from '@/lib/domain/rule';
 import type { DB, TaskTable } from '../tables';
+import { hasReached, localDayAt } from './due-state';
 
 type UnitIds = readonly string[] | 'all';
 
@@ -30,7 +31,7 @@ function among(column: string, unitIds: UnitIds) {
 
 /** Units in service with where their meters and days stand; a list of one is looked up, of all is read through. */
 const fleet = (unitIds: UnitIds, now: Date) => sql`
-    select u.id, m.engine_hours_tenths, m.outing_count, (${now}::timestamptz at time zone d.time_zone)::date as today,
+    select u.id, m.engine_hours_tenths, m.outing_count, ${localDayAt(now)} as today,
            coalesce(u.carb_count_override, o.carb_count) as carb_count, o.engines
       from unit u
       join model o on o.id = u.model_id
@@ -51,9 +52,7 @@ export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): 
         from fleet f
         join due_point p on p.unit_id = f.id
         join rule r on r.id = p.rule_id and r.ended_at is null
-       where f.engine_hours_tenths >= p.upcoming_from_tenths
-          or f.outing_count >= p.upcoming_from_outings
-          or f.today >= p.upcoming_from_on),
+       where ${hasReached('upcoming_from', { meter: 'f', today: sql`f.today` })}),
     withdrawn as (
       update task t set ended_at = ${now}, withdraw_reason = 'No longer due.', revision = t.revision + 1
        where t.ended_at is null and t.origin = 'rule' and t.started_at is null and t.planned_on is null

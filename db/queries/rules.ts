@@ -7,6 +7,7 @@ import {
   type Updateable,
 } from 'kysely';
 import type { DB, RuleTable } from '../tables';
+import { hasReached, localDayAt } from './due-state';
 
 export type RuleRow = Selectable<RuleTable>;
 /** A rule with the names of who changed and who ended it. */
@@ -78,6 +79,7 @@ export async function listRuleStates(
   now: Date,
 ): Promise<RuleStatesRow[]> {
   const atDocks = dockIds === 'all' ? sql`true` : sql`u.dock_id = any(${[...dockIds]}::uuid[])`;
+  const at = { meter: 'm', today: localDayAt(now) };
   const { rows } = await sql<RuleStatesRow>`
     select rule_id,
            count(*) filter (where worst = 3)::int as overdue,
@@ -85,12 +87,9 @@ export async function listRuleStates(
            count(*) filter (where worst = 1)::int as upcoming
       from (
         select p.rule_id, p.unit_id, max(case
-            when m.engine_hours_tenths >= p.overdue_from_tenths or m.outing_count >= p.overdue_from_outings
-              or (${now}::timestamptz at time zone d.time_zone)::date >= p.overdue_from_on then 3
-            when m.engine_hours_tenths >= p.due_tenths or m.outing_count >= p.due_outings
-              or (${now}::timestamptz at time zone d.time_zone)::date >= p.due_on then 2
-            when m.engine_hours_tenths >= p.upcoming_from_tenths or m.outing_count >= p.upcoming_from_outings
-              or (${now}::timestamptz at time zone d.time_zone)::date >= p.upcoming_from_on then 1
+            when ${hasReached('overdue_from', at)} then 3
+            when ${hasReached('due', at)} then 2
+            when ${hasReached('upcoming_from', at)} then 1
             else 0 end) as worst
           from due_point p
           join unit u on u.id = p.unit_id and u.retired_at is null
