@@ -1,5 +1,6 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
+import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { Lead, Labour, PartNeed, Scope, Trigger, Window } from '@/lib/domain/rule';
 
 /** An instant: read as a Date, written as a Date. */
@@ -213,19 +214,10 @@ export interface AssessmentTable {
   points_hash: string | null;
 }
 
-export interface DuePointTable {
+export interface DuePointTable extends DuePointColumns {
   unit_id: string;
   rule_id: string;
   trigger_index: number;
-  due_tenths: number | null;
-  upcoming_from_tenths: number | null;
-  overdue_from_tenths: number | null;
-  due_outings: number | null;
-  upcoming_from_outings: number | null;
-  overdue_from_outings: number | null;
-  due_on: CalendarDay | null;
-  upcoming_from_on: CalendarDay | null;
-  overdue_from_on: CalendarDay | null;
 }
 
 export interface DefectTable {

@@ -4,9 +4,6 @@ import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { HoldReason } from '@/lib/domain/readiness';
 import type { DB } from '../tables';
 
-/** The columns of a stored due point that its words need; those of the other measures are null. */
-export type StoredPoint = DuePointColumns;
-
 /** One hold of a unit. `since` is an instant as ISO text, `point` the due point of an overdue rule. */
 export type StoredHold = {
   reason: Exclude<HoldReason, 'too_little_left'>;
@@ -18,7 +15,7 @@ export type StoredHold = {
   lay_up_id: string | null;
   lay_up_reason: string | null;
   since: string;
-  point: StoredPoint | null;
+  point: DuePointColumns | null;
 };
 
 /** A unit with its holds, what is left before the next one, and its open outing. */
