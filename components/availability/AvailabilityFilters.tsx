@@ -20,7 +20,7 @@ export function AvailabilityFilters({
     <form
       role="search"
       onSubmit={(event) => event.preventDefault()}
-      className="grid grid-cols-2 gap-4 sm:grid-cols-3 [&>:first-child]:col-span-full sm:[&>:first-child]:col-span-1"
+      className="grid grid-cols-[2fr_3fr] gap-4 *:min-w-0 sm:grid-cols-3 [&>:first-child]:col-span-full sm:[&>:first-child]:col-span-1"
     >
       <Select
         name="dockId"

@@ -110,7 +110,7 @@ function Line({ arg }: { arg: EventContentArg }) {
       <span className="cal-text">
         <CalendarMark state={line.state} />
         <strong>
-          {line.count} {calendarStates[line.state].toLowerCase()}
+          {line.count} <span className="cal-word">{calendarStates[line.state].toLowerCase()}</span>
         </strong>
       </span>
     );
@@ -120,7 +120,7 @@ function Line({ arg }: { arg: EventContentArg }) {
     <span className="cal-text" title={hint}>
       <span className="cal-head">
         <CalendarMark state={event.state} />
-        <strong>{calendarStates[event.state]}</strong>
+        <strong className="cal-word">{calendarStates[event.state]}</strong>
         <span className="numerals">{event.fleetNumber}</span>
       </span>
       <span className="cal-title">{event.title}</span>

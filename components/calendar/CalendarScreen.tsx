@@ -85,7 +85,7 @@ export function CalendarScreen({
           </Notice>
         </div>
       ) : null}
-      <div className="mt-6 grid gap-8 xl:grid-cols-[minmax(0,1fr)_18rem]">
+      <div className="mt-4 grid gap-8 sm:mt-6 xl:grid-cols-[minmax(0,1fr)_18rem]">
         <section aria-label="Calendar" className="min-w-0">
           <CalendarToolbar
             title={viewTitle(view, day, from)}

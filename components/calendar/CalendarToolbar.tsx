@@ -19,7 +19,7 @@ export function CalendarToolbar({
 }) {
   const span = view === 'week' ? 'week' : 'month';
   return (
-    <div className="mb-4 flex flex-wrap items-end justify-between gap-4">
+    <div className="mb-4 flex flex-wrap items-end justify-between gap-x-4 gap-y-2">
       <div className="flex flex-wrap items-center gap-2">
         <div className="no-print flex gap-2">
           <Button onClick={() => onStep(-1)}>
@@ -30,7 +30,7 @@ export function CalendarToolbar({
             Next<Rest>{span}</Rest>
           </Button>
         </div>
-        <h2 className="text-2xl sm:ml-3" aria-live="polite">
+        <h2 className="order-first w-full text-2xl sm:order-none sm:ml-3 sm:w-auto" aria-live="polite">
           {title}
         </h2>
       </div>
@@ -38,6 +38,7 @@ export function CalendarToolbar({
         className="no-print"
         name="view"
         label="Show as"
+        quiet
         look="segmented"
         options={CALENDAR_VIEWS.map((value) => ({ value, label: viewWords[value] }))}
         value={view}

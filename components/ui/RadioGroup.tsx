@@ -13,6 +13,8 @@ export type RadioGroupProps = FieldText &
     /** `segmented` lays short choices side by side as one bar; `list` stacks them with their hints. */
     look?: 'list' | 'segmented';
     large?: boolean;
+    /** Says the label to assistive technology only, where the choices speak for themselves. */
+    quiet?: boolean;
   };
 
 /** One of a few. Native radio buttons, so arrow keys, forms and assistive technology just work. */
@@ -26,6 +28,7 @@ export function RadioGroup({
   defaultValue,
   look = 'list',
   large = false,
+  quiet = false,
   id,
   className,
   ...rest
@@ -41,7 +44,7 @@ export function RadioGroup({
       aria-describedby={described['aria-describedby']}
       aria-invalid={described['aria-invalid']}
     >
-      <legend className="float-left mb-1.5 font-semibold">
+      <legend className={quiet ? 'sr-only' : 'float-left mb-1.5 font-semibold'}>
         {label}
         {optional ? <span className="font-normal text-ink-soft"> (optional)</span> : null}
       </legend>

@@ -14,7 +14,12 @@ export default async function CalendarPage() {
   const header = (
     <PageHeader
       title="Calendar"
-      lead="What is planned, due and done. Work that is not done moves along with today."
+      lead={
+        <>
+          What is planned, due and done.{' '}
+          <span className="max-sm:hidden">Work that is not done moves along with today.</span>
+        </>
+      }
     />
   );
   if (docks.length === 0)
