@@ -34,7 +34,7 @@ export function digestSections(digest: Digest, dock: DockDigest): LetterSection[
       lines: dock.overdue.map((line) => ({
         unit: line.fleetNumber,
         path: `/units/${line.unitId}`,
-        text: `${line.ruleName}: overdue by ${line.by}${line.holdsUnit ? '; holds the unit' : ''}`,
+        text: `${line.ruleName}: overdue ${line.late}${line.holdsUnit ? '; holds the unit' : ''}`,
       })),
       none: 'Nothing is overdue.',
     },

@@ -41,7 +41,7 @@ export type DockFacts = Opening & {
   closed: readonly ClosedFacts[];
 };
 
-export type OverdueLine = OfUnit & { ruleId: string; ruleName: string; holdsUnit: boolean; by: string };
+export type OverdueLine = OfUnit & { ruleId: string; ruleName: string; holdsUnit: boolean; late: string };
 /** `since` is null when the unit is not held any more. */
 export type HeldLine = OfUnit & { reasons: readonly string[]; since: CalendarDay | null; daysLost: number };
 export type DueLine = OfUnit & { ruleId: string; ruleName: string; when: string };
@@ -91,9 +91,9 @@ function computeDock(weekOn: CalendarDay, dock: DockFacts): DockDigest {
   const overdue: OverdueLine[] = [];
   const due: DueLine[] = [];
   for (const { points, standing, ranTenths, ranOutings, holdsUnit, ...duty } of dock.duties) {
-    const by = describeLateness(points, standing);
-    const when = by ? null : describeNext(points, standing, { ranTenths, ranOutings });
-    if (by) overdue.push({ ...duty, holdsUnit, by });
+    const late = describeLateness(points, standing);
+    const when = late ? null : describeNext(points, standing, { ranTenths, ranOutings });
+    if (late) overdue.push({ ...duty, holdsUnit, late });
     else if (when) due.push({ ...duty, when });
   }
   const lost = countDaysLost(weekOn, dock);
@@ -111,20 +111,28 @@ function computeDock(weekOn: CalendarDay, dock: DockFacts): DockDigest {
   };
 }
 
-/** How far past the end of its window a duty is, by each measure that is: '12.3 h and 4 days'; null if it is not. */
+/**
+ * How far past the end of its window a duty is, by each measure that is: 'by 12.3 h and 4 days'; null if it is not.
+ * A meter that has just got there has nothing left and is past by nothing.
+ */
 function describeLateness(points: readonly DuePoint[], standing: Standing): string | null {
-  const parts = points.flatMap((point) => {
-    if (computeState(point, standing) !== 'overdue') return [];
+  const overdue = points.filter((point) => computeState(point, standing) === 'overdue');
+  if (overdue.length === 0) return null;
+  const parts = overdue.flatMap((point) => {
     switch (point.on) {
-      case 'engine_hours':
-        return [`${formatTenths(standing.engineHoursTenths - point.overdueFromTenths)} h`];
-      case 'outings':
-        return [countOf(standing.outings - point.overdueFromOutings, 'outing')];
+      case 'engine_hours': {
+        const tenths = standing.engineHoursTenths - point.overdueFromTenths;
+        return tenths > 0 ? [`${formatTenths(tenths)} h`] : [];
+      }
+      case 'outings': {
+        const outings = standing.outings - point.overdueFromOutings;
+        return outings > 0 ? [countOf(outings, 'outing')] : [];
+      }
       case 'calendar':
         return [countOf(daysBetween(point.overdueFromOn, standing.today) + 1, 'day')];
     }
   });
-  return parts.length > 0 ? joinWords(parts) : null;
+  return parts.length > 0 ? `by ${joinWords(parts)}` : 'since its last outing';
 }
 
 type Ran = { ranTenths: number; ranOutings: number };

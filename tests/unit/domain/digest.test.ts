@@ -101,12 +101,12 @@ test('in the week the clocks go forward, noon moves by an hour in UTC', () => {
 });
 
 test('an overdue duty says by how much, by every measure it is late by', () => {
-  expect(overdueOf([duty([hours(900, 50)])])[0]).toMatchObject({ by: '5.0 h', holdsUnit: true });
+  expect(overdueOf([duty([hours(900, 50)])])[0]).toMatchObject({ late: 'by 5.0 h', holdsUnit: true });
   // Last day Thu 26 Nov, so overdue from the 27th: four days on Mon 30 Nov.
   expect(overdueOf([duty([hours(900), day('2026-11-26', '2026-11-27')])])[0]).toMatchObject({
-    by: '10.0 h and 4 days',
+    late: 'by 10.0 h and 4 days',
   });
-  expect(overdueOf([duty([hours(1000)])])[0]).toMatchObject({ by: '0.0 h' });
+  expect(overdueOf([duty([hours(1000)])])[0]).toMatchObject({ late: 'since its last outing' });
   expect(overdueOf([duty([hours(1001)])])).toEqual([]);
 });
 
