@@ -1,3 +1,4 @@
+import { escapeHtml } from '@/lib/domain/escape-html';
 import type { Letter } from './queue-mail';
 
 const DAY_AND_TIME = new Intl.DateTimeFormat('en-GB', {
@@ -42,14 +43,3 @@ export function writeLetter({ kind, to, subject, before, link, after }: LetterPa
 }
 
 const paragraph = (words: string) => `<p>${escapeHtml(words)}</p>`;
-
-function escapeHtml(words: string): string {
-  const signs: Record<string, string> = {
-    '&': '&amp;',
-    '<': '&lt;',
-    '>': '&gt;',
-    '"': '&quot;',
-    "'": '&#39;',
-  };
-  return words.replace(/[&<>"']/g, (sign) => signs[sign] ?? sign);
-}

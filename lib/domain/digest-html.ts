@@ -7,16 +7,8 @@ import {
   digestSubject,
   type LetterSection,
 } from './digest-letter';
+import { escapeHtml } from './escape-html';
 import { describeDay } from './words';
-
-const ESCAPES: Record<string, string> = {
-  '&': '&amp;',
-  '<': '&lt;',
-  '>': '&gt;',
-  '"': '&quot;',
-  "'": '&#39;',
-};
-const escape = (text: string) => text.replace(/[&<>"']/g, (character) => ESCAPES[character]!);
 
 const FONT = "font-family:'Atkinson Hyperlegible Next',Verdana,Arial,sans-serif";
 const COLOURS = {
@@ -40,14 +32,14 @@ export function digestHtml(digest: Digest, links: DigestLinks): string {
   return `<!doctype html>
 <html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width">
 <meta name="color-scheme" content="light dark"><meta name="supported-color-schemes" content="light dark">
-<title>${escape(digestSubject(digest))}</title><style>${DARK}</style></head>
+<title>${escapeHtml(digestSubject(digest))}</title><style>${DARK}</style></head>
 <body class="paper" style="margin:0;padding:0;background:${COLOURS.paper}">
 <table role="presentation" class="paper" width="100%" cellpadding="0" cellspacing="0" style="background:${COLOURS.paper}"><tr><td align="center" style="padding:16px 8px">
 <table role="presentation" width="100%" cellpadding="0" cellspacing="0" style="max-width:640px"><tr>
 <td class="ink" style="${FONT};font-size:16px;line-height:24px;color:${COLOURS.ink};text-align:left">
 <p class="soft" style="margin:0;color:${COLOURS.soft}">Wakewright</p>
-<h1 style="margin:0 0 4px;font-size:24px;line-height:30px">Week of ${escape(describeDay(digest.weekOn))}</h1>
-<p style="margin:0 0 16px;font-size:18px;line-height:26px">${escape(capital(describeTotals(digest)))}.</p>
+<h1 style="margin:0 0 4px;font-size:24px;line-height:30px">Week of ${escapeHtml(describeDay(digest.weekOn))}</h1>
+<p style="margin:0 0 16px;font-size:18px;line-height:26px">${escapeHtml(capital(describeTotals(digest)))}.</p>
 ${digest.docks.map((dock) => dockHtml(digest, dock, links)).join('\n')}
 <p style="margin:16px 0 8px">${anchor(links.page('/digest'), 'All of it as it stands now')}</p>
 <p class="soft" style="margin:0;font-size:14px;line-height:20px;color:${COLOURS.soft}">You get this letter on Mondays because you asked for it. ${anchor(links.unsubscribe, 'Send me no more of them')}</p>
@@ -58,7 +50,7 @@ ${digest.docks.map((dock) => dockHtml(digest, dock, links)).join('\n')}
 function dockHtml(digest: Digest, dock: DockDigest, links: DigestLinks): string {
   return `<table role="presentation" width="100%" cellpadding="0" cellspacing="0" style="margin:0 0 16px"><tr>
 <td class="raised ink" style="${FONT};font-size:16px;line-height:24px;color:${COLOURS.ink};background:${COLOURS.raised};border:1px solid ${COLOURS.edge};padding:16px">
-<h2 class="line" style="margin:0 0 8px;padding:0 0 6px;font-size:20px;line-height:26px;border-bottom:3px solid ${COLOURS.line}">${escape(dock.name)}</h2>
+<h2 class="line" style="margin:0 0 8px;padding:0 0 6px;font-size:20px;line-height:26px;border-bottom:3px solid ${COLOURS.line}">${escapeHtml(dock.name)}</h2>
 ${digestSections(digest, dock)
   .map((section) => sectionHtml(section, links))
   .join('\n')}
@@ -68,13 +60,13 @@ ${digestSections(digest, dock)
 function sectionHtml({ title, note, lines, none }: LetterSection, links: DigestLinks): string {
   const items = lines.map(
     ({ unit, path, text }) =>
-      `<li style="margin:0 0 6px"><strong>${anchor(links.page(path), unit)}</strong> ${escape(text)}</li>`,
+      `<li style="margin:0 0 6px"><strong>${anchor(links.page(path), unit)}</strong> ${escapeHtml(text)}</li>`,
   );
-  return `<h3 style="margin:16px 0 4px;font-size:17px;line-height:24px">${escape(title)}${lines.length > 0 ? ` (${lines.length})` : ''}</h3>
-${note ? `<p class="soft" style="margin:0 0 6px;color:${COLOURS.soft}">${escape(note)}</p>` : ''}
-${items.length > 0 ? `<ul style="margin:0;padding:0 0 0 20px">${items.join('')}</ul>` : `<p style="margin:0">${escape(none)}</p>`}`;
+  return `<h3 style="margin:16px 0 4px;font-size:17px;line-height:24px">${escapeHtml(title)}${lines.length > 0 ? ` (${lines.length})` : ''}</h3>
+${note ? `<p class="soft" style="margin:0 0 6px;color:${COLOURS.soft}">${escapeHtml(note)}</p>` : ''}
+${items.length > 0 ? `<ul style="margin:0;padding:0 0 0 20px">${items.join('')}</ul>` : `<p style="margin:0">${escapeHtml(none)}</p>`}`;
 }
 
 function anchor(href: string, text: string): string {
-  return `<a class="link" href="${escape(href)}" style="color:#00405f">${escape(text)}</a>`;
+  return `<a class="link" href="${escapeHtml(href)}" style="color:#00405f">${escapeHtml(text)}</a>`;
 }
