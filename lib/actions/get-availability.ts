@@ -1,12 +1,11 @@
 import { listReadiness } from '@/db/queries/readiness';
 import type { Context } from '@/lib/context';
 import { visibleDocks } from '@/lib/domain/access';
+import { compareFleetNumbers } from '@/lib/domain/natural-order';
 import type { Availability, AvailabilityQuery } from '@/lib/schemas/availability';
 import { toTenths } from '@/lib/schemas/schedule-shape';
 import { accessDock } from './access';
 import { toHolds, toStanding } from './shape-readiness';
-
-const byFleetNumber = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
 
 /**
  * Which units may be hired out, which are out, and which are held and why, read at this moment: no job has to have
@@ -20,7 +19,7 @@ export async function getAvailability(ctx: Context, query: AvailabilityQuery): P
   const onDay = query.on ?? null;
   const plannedTenths = query.hours === undefined ? null : toTenths(query.hours);
   const rows = await listReadiness(ctx.db, { dockIds }, ctx.now, onDay);
-  rows.sort((a, b) => byFleetNumber.compare(a.fleet_number, b.fleet_number));
+  rows.sort((a, b) => compareFleetNumbers(a.fleet_number, b.fleet_number));
   const answer: Availability = { asOf: ctx.now.toISOString(), ready: [], out: [], held: [] };
   for (const row of rows) {
     const unit = toStanding(row);

@@ -1,13 +1,13 @@
 import { listUnits as listUnitRows, type UnitRow } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
 import { visibleDocks } from '@/lib/domain/access';
+import { compareFleetNumbers } from '@/lib/domain/natural-order';
 import { refuseField } from '@/lib/errors';
 import { readCursor, writeCursor } from '@/lib/schemas/cursor';
 import { unitPlace, type Unit, type UnitsQuery } from '@/lib/schemas/unit';
 import { requireAtDock } from './access';
 import { toUnit } from './shape-unit';
 
-const natural = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
 type Place = { fleetNumber: string; id: string };
 
 /**
@@ -35,5 +35,5 @@ function placeOf(row: UnitRow): Place {
 }
 
 function compare(a: Place, b: Place): number {
-  return natural.compare(a.fleetNumber, b.fleetNumber) || (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
+  return compareFleetNumbers(a.fleetNumber, b.fleetNumber) || (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
 }

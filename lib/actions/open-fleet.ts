@@ -4,11 +4,10 @@ import { listReadiness } from '@/db/queries/readiness';
 import { listRetiredUnits, listUnits } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
 import { canSomewhere, visibleDocks, worksAt } from '@/lib/domain/access';
+import { compareFleetNumbers } from '@/lib/domain/natural-order';
 import type { FleetFilter, FleetPage } from '@/lib/schemas/fleet';
 import { requireSomewhere } from './access';
 import { toFleetUnit } from './shape-fleet-unit';
-
-const byFleetNumber = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
 
 /**
  * The units of the docks the actor works at, in the natural order of their fleet numbers, each as it stands at this
@@ -30,7 +29,7 @@ export async function openFleet(ctx: Context, filter: FleetFilter): Promise<Flee
     .map((row) => toFleetUnit(row, standing.get(row.id), ctx.now))
     .filter(({ modelId }) => !filter.model || modelId === filter.model)
     .filter(({ state }) => !filter.state || retired || state === filter.state)
-    .sort((a, b) => byFleetNumber.compare(a.fleetNumber, b.fleetNumber));
+    .sort((a, b) => compareFleetNumbers(a.fleetNumber, b.fleetNumber));
   return {
     units,
     docks: docks.map(({ id, name }) => ({ id, name })),

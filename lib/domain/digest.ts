@@ -3,6 +3,7 @@ import { addDays, type CalendarDay, daysBetween, localDay } from './calendar-day
 import { computeState, type DuePoint, type Standing } from './due';
 import { hasReached } from './local-time';
 import { formatTenths } from './meter';
+import { compareFleetNumbers } from './natural-order';
 import { isOpenOn, type Opening } from './season';
 import { countOf, describeDay, joinWords } from './words';
 
@@ -65,8 +66,7 @@ export type Digest = {
   totals: DigestTotals;
 };
 
-const inOrder = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });
-const byUnit = (a: OfUnit, b: OfUnit) => inOrder.compare(a.fleetNumber, b.fleetNumber);
+const byUnit = (a: OfUnit, b: OfUnit) => compareFleetNumbers(a.fleetNumber, b.fleetNumber);
 
 /** The digest of the week that begins on the Monday `weekOn`. */
 export function computeDigest(weekOn: CalendarDay, facts: readonly DockFacts[]): Digest {
