@@ -8,6 +8,7 @@ import type { UnitDuePoints } from '@/lib/schemas/due-point';
 import { toHours } from '@/lib/schemas/schedule-shape';
 import { accessUnit } from './access';
 import { toDuty } from './shape-duty';
+import { toScopedUnit } from './shape-unit';
 
 /**
  * How a unit stands today under every rule that is for it, worst first: each trigger's stored due point, its
@@ -15,7 +16,6 @@ import { toDuty } from './shape-duty';
  */
 export async function listDuePoints(ctx: Context, unitId: string): Promise<UnitDuePoints> {
   const unit = await accessUnit(ctx, unitId, 'unit.read');
-  const { model_id: modelId, dock_id: dockId, propulsion, stroke, carb_count: carbCount } = unit;
   const [rules, points, closings, assessed] = await Promise.all([
     listRules(ctx.db),
     listDuePointRows(ctx.db, unit.id),
@@ -32,7 +32,7 @@ export async function listDuePoints(ctx: Context, unitId: string): Promise<UnitD
       (_, index) => points.find((p) => p.ruleId === rule.id && p.triggerIndex === index)?.point ?? null,
     );
   const items = rules
-    .filter((rule) => ruleApplies(rule.scope, { modelId, dockId, propulsion, stroke, carbCount }))
+    .filter((rule) => ruleApplies(rule.scope, toScopedUnit(unit)))
     .map((rule) =>
       toDuty(rule, pointsOf(rule), standing, closings.find((closing) => closing.rule_id === rule.id) ?? null),
     )

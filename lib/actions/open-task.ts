@@ -12,6 +12,7 @@ import { accessUnit } from './access';
 import { checkPlannedOn } from './check-planned-on';
 import { getTask } from './get-task';
 import { refusingTaken } from './refusing-taken';
+import { toScopedUnit } from './shape-unit';
 
 /**
  * Opens a task that a person asks for; or, with `ruleId`, the task of a rule before its lead, so that it can be
@@ -60,14 +61,7 @@ function openAdHoc(ctx: Context, unit: UnitRow, input: OpenTask): Promise<string
 async function openOfRule(ctx: Context, unit: UnitRow, ruleId: string, input: OpenTask): Promise<string> {
   const rule = await findRule(ctx.db, ruleId);
   if (!rule) throw refuseField('ruleId', 'is no rule of this fleet', 'not_found');
-  const scoped = {
-    modelId: unit.model_id,
-    propulsion: unit.propulsion,
-    stroke: unit.stroke,
-    carbCount: unit.carb_count,
-    dockId: unit.dock_id,
-  };
-  if (rule.ended_at || !ruleApplies(rule.scope, scoped))
+  if (rule.ended_at || !ruleApplies(rule.scope, toScopedUnit(unit)))
     throw refuseField('ruleId', 'is a rule that does not apply to this unit');
   const taken = 'has an open task on this unit already';
   const { id } = await refusingTaken({ task_open_rule: ['ruleId', taken] }, () =>

@@ -11,6 +11,7 @@ import { toTenths } from '@/lib/schemas/schedule-shape';
 import { accessRule, accessUnit } from './access';
 import { assessAgain } from './assess-again';
 import { toBaseline } from './shape-baseline';
+import { toScopedUnit } from './shape-unit';
 
 /**
  * Records that a rule's work was last done on a unit before its closures were kept here, and has the unit
@@ -49,7 +50,6 @@ export async function recordBaseline(ctx: Context, unitId: string, input: Record
 async function checkRule(ctx: Context, unit: UnitRow, ruleId: string): Promise<void> {
   const rule = await accessRule(ctx, ruleId, 'rule.read', 'ruleId');
   if (rule.ended_at) throw refuseField('ruleId', 'is a rule that has ended');
-  const { model_id: modelId, dock_id: dockId, propulsion, stroke, carb_count: carbCount } = unit;
-  if (!ruleApplies(rule.scope, { modelId, dockId, propulsion, stroke, carbCount }))
+  if (!ruleApplies(rule.scope, toScopedUnit(unit)))
     throw refuseField('ruleId', 'is a rule that is not for this unit');
 }

@@ -1,4 +1,5 @@
 import type { UnitRow } from '@/db/queries/units';
+import type { ScopedUnit } from '@/lib/domain/rule';
 import type { Unit } from '@/lib/schemas/unit';
 
 /** A unit as the API and the screens show it: engine hours in decimal hours. */
@@ -18,5 +19,16 @@ export function toUnit(row: UnitRow): Unit {
     carbCount: row.carb_count,
     readAt: row.read_at.toISOString(),
     retiredAt: row.retired_at?.toISOString() ?? null,
+  };
+}
+
+/** What of a unit decides which rules are for it. */
+export function toScopedUnit(row: UnitRow): ScopedUnit {
+  return {
+    modelId: row.model_id,
+    propulsion: row.propulsion,
+    stroke: row.stroke,
+    carbCount: row.carb_count,
+    dockId: row.dock_id,
   };
 }
