@@ -3,6 +3,7 @@ import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePointColumns } from '@/lib/domain/duty-standing';
 import type { DB } from '../tables';
 import { localDayAt } from './due-state';
+import { lastReadingAt } from './reading-order';
 
 type At = { dock_id: string; unit_id: string; fleet_number: string };
 type Docks = readonly string[];
@@ -23,21 +24,20 @@ export type StoredDuty = At & {
  * the unit ran in the 28 days before `now`.
  */
 export async function listNearDuties(db: Kysely<DB>, dockIds: Docks, now: Date): Promise<StoredDuty[]> {
+  const since = new Date(now.getTime() - 28 * 86_400_000);
   const { rows } = await sql<StoredDuty>`
     with fleet as (
       select u.id, u.dock_id, u.fleet_number, m.engine_hours_tenths, m.outing_count,
              ${localDayAt(now)} as today,
              m.engine_hours_tenths - coalesce(
-               (select r.engine_hours_tenths from reading r
-                 where r.unit_id = u.id and r.voided_at is null and r.taken_at <= ${now}::timestamptz - interval '28 days'
-                 order by r.taken_at desc, r.engine_hours_tenths desc limit 1),
+               (select r.engine_hours_tenths from (${lastReadingAt(sql`u.id`, since)}) r),
                (select r.engine_hours_tenths from reading r
                  where r.unit_id = u.id and r.voided_at is null
                  order by r.taken_at, r.engine_hours_tenths limit 1),
                m.engine_hours_tenths) as ran_tenths,
              (select count(*)::int from outing o
                where o.unit_id = u.id and o.voided_at is null
-                 and o.ended_at > ${now}::timestamptz - interval '28 days') as ran_outings
+                 and o.ended_at > ${since}) as ran_outings
         from unit u
         join dock d on d.id = u.dock_id
         join live_meter m on m.unit_id = u.id

@@ -1,5 +1,6 @@
 import { sql, type Kysely, type RawBuilder } from 'kysely';
 import type { DB } from '../tables';
+import { LATEST_FIRST } from './reading-order';
 
 /**
  * One entry of a unit's history. `place` is its instant to the microsecond, `rank` orders those of one instant (the
@@ -69,7 +70,7 @@ const outings: Branch = (unitId) =>
                'readingId', r.id, 'engineHours', r.engine_hours_tenths / 10.0, ${voidedOf('o')}) as facts
         from outing o join dock d on d.id = o.dock_id
         left join lateral (select * from reading r where r.outing_id = o.id and r.voided_at is null
-                            order by r.engine_hours_tenths desc limit 1) r on true
+                            order by ${LATEST_FIRST} limit 1) r on true
        where o.unit_id = ${unitId} and ${condition}`,
   );
 

@@ -1,5 +1,6 @@
-import { sql, type Kysely, type Transaction } from 'kysely';
+import { sql, type Kysely, type RawBuilder, type Transaction } from 'kysely';
 import type { DB } from '../tables';
+import { firstReadingAfter, lastReadingAt } from './reading-order';
 
 /** A reading as its neighbours are compared: what the meter showed, what that made in engine hours, and when. */
 export type ReadingThen = {
@@ -15,23 +16,13 @@ export async function findReadingsAround(
   unitId: string,
   at: Date,
 ): Promise<{ last: ReadingThen | null; next: ReadingThen | null }> {
-  const readings = db
-    .selectFrom('reading')
-    .select(['shown_tenths', 'base_tenths', 'engine_hours_tenths', 'taken_at'])
-    .where('unit_id', '=', unitId)
-    .where('voided_at', 'is', null)
-    .limit(1);
-  const last = await readings
-    .where('taken_at', '<=', at)
-    .orderBy('taken_at', 'desc')
-    .orderBy('engine_hours_tenths', 'desc')
-    .executeTakeFirst();
-  const next = await readings
-    .where('taken_at', '>', at)
-    .orderBy('taken_at')
-    .orderBy('engine_hours_tenths')
-    .executeTakeFirst();
-  return { last: last ?? null, next: next ?? null };
+  const unit = sql<string>`${unitId}::uuid`;
+  const find = async (reading: RawBuilder<unknown>) => {
+    const { rows } = await sql<ReadingThen>`
+      select shown_tenths, base_tenths, engine_hours_tenths, taken_at from (${reading}) found`.execute(db);
+    return rows[0] ?? null;
+  };
+  return { last: await find(lastReadingAt(unit, at)), next: await find(firstReadingAfter(unit, at)) };
 }
 
 /** How many outings ended after an instant, and when the outing now under way began. */

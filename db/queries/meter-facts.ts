@@ -1,5 +1,6 @@
 import { sql, type Kysely } from 'kysely';
 import type { DB } from '../tables';
+import { firstReadingAfter, lastReadingAt } from './reading-order';
 
 /** Which unit, as of when, and the id under which the reading is to be kept. */
 export type MeterFactsAsked = { unitId: string; at: Date; readingId: string };
@@ -31,7 +32,6 @@ export type MeterFacts = {
 /**
  * The unit with its live meter, the readings before and after the instant asked about, its open outing, and the
  * reading kept under this id, in one round trip and without a lock: `revision` says later whether it still holds.
- * Of readings of one instant the last is that of the most engine hours, and a new meter's after the old one's.
  */
 export async function findMeterFacts(
   db: Kysely<DB>,
@@ -47,14 +47,8 @@ export async function findMeterFacts(
       from unit u
       join dock d on d.id = u.dock_id
       join live_meter m on m.unit_id = u.id
-      left join lateral (
-        select r.taken_at, r.shown_tenths, r.base_tenths from reading r
-         where r.unit_id = u.id and r.voided_at is null and r.taken_at <= ${at}
-         order by r.taken_at desc, r.engine_hours_tenths desc, r.source = 'swap_final' limit 1) last on true
-      left join lateral (
-        select r.taken_at, r.engine_hours_tenths from reading r
-         where r.unit_id = u.id and r.voided_at is null and r.taken_at > ${at}
-         order by r.taken_at, r.engine_hours_tenths limit 1) next on true
+      left join lateral (${lastReadingAt(sql`u.id`, at)}) last on true
+      left join lateral (${firstReadingAfter(sql`u.id`, at)}) next on true
       left join outing o on o.unit_id = u.id and o.ended_at is null and o.voided_at is null
       left join reading kept on kept.id = ${readingId}
      where u.id = ${unitId} /* prepared */`.execute(db);

@@ -1,5 +1,6 @@
 import { sql, type Insertable, type Kysely, type Transaction } from 'kysely';
 import type { DB, ReadingTable } from '../tables';
+import { LATEST_FIRST } from './reading-order';
 
 /** A reading with what its unit says of it. */
 export type ReadingRow = NonNullable<Awaited<ReturnType<typeof findReading>>>;
@@ -59,8 +60,7 @@ export function listReadingsFrom(db: Kysely<DB>, unitId: string, from: Date) {
 }
 
 /**
- * Sets the unit's live meter to what its readings and outings say that are not void. The unit must be locked. Of a meter
- * swap and the reading that came with it, all of one instant, it is the reading that counts, as when it was kept.
+ * Sets the unit's live meter to what its readings and outings say that are not void. The unit must be locked.
  */
 export async function recountLiveMeter(trx: Transaction<DB>, unitId: string): Promise<void> {
   await sql`
@@ -73,8 +73,7 @@ export async function recountLiveMeter(trx: Transaction<DB>, unitId: string): Pr
       from (
         select r.* from reading r
          where r.unit_id = ${unitId} and r.voided_at is null
-         order by r.taken_at desc, r.engine_hours_tenths desc,
-                  case r.source when 'swap_final' then 2 when 'swap_first' then 1 else 0 end limit 1) last
+         order by ${LATEST_FIRST} limit 1) last
      where m.unit_id = ${unitId}`.execute(trx);
 }
 

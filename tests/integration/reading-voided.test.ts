@@ -73,6 +73,20 @@ describe('a mistaken reading', () => {
     expect(await meter()).toMatchObject({ engine_hours_tenths: 1000, outing_count: 0 });
   });
 
+  test('leaves the meter, of two alike before it, at the one that was recorded last', async () => {
+    const taken = { at: new Date('2026-06-02T11:00:00Z') };
+    await back('11:00', 100.5, taken);
+    const second = await logReading(at('11:30'), { id: randomUUID(), unitId, hours: 100.5, ...taken });
+    const wrong = await back('12:00', 101.5);
+    await voidReading(at('12:05'), wrong.id, { reason: 'Another unit’s meter' });
+    const { reading_id } = await database.db
+      .selectFrom('live_meter')
+      .select('reading_id')
+      .where('unit_id', '=', unitId)
+      .executeTakeFirstOrThrow();
+    expect(reading_id).toBe(second.id);
+  });
+
   test('in the middle leaves the meter where the last reading put it', async () => {
     const { id } = await back('11:00', 101);
     await back('13:00', 102);
