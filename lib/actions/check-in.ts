@@ -1,6 +1,7 @@
 import { getCheckIn } from '@/db/queries/check-ins';
 import type { Context } from '@/lib/context';
 import type { CheckIn, CreateCheckIn } from '@/lib/schemas/check-in';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import { keepReading } from './keep-reading';
 
 /**
@@ -16,9 +17,9 @@ export async function checkIn(ctx: Context, input: CreateCheckIn): Promise<Check
   return {
     id: kept.id,
     unitId: plan.unitId,
-    engineHours: (kept.base_tenths + kept.shown_tenths) / 10,
-    shownHours: kept.shown_tenths / 10,
-    hoursRun: judged.ranTenths / 10,
+    engineHours: toHours(kept.base_tenths + kept.shown_tenths),
+    shownHours: toHours(kept.shown_tenths),
+    hoursRun: toHours(judged.ranTenths),
     outings: plan.meter.outing_count,
     outingId: plan.outing!.id,
     at: at.toISOString(),
@@ -32,9 +33,9 @@ async function answerAgain(ctx: Context, id: string): Promise<CheckIn> {
   return {
     id,
     unitId: row.unit_id,
-    engineHours: row.engine_hours_tenths / 10,
-    shownHours: row.shown_tenths / 10,
-    hoursRun: row.ran_tenths / 10,
+    engineHours: toHours(row.engine_hours_tenths),
+    shownHours: toHours(row.shown_tenths),
+    hoursRun: toHours(row.ran_tenths),
     outings: row.outings,
     outingId: row.outing_id,
     at: row.taken_at.toISOString(),

@@ -16,7 +16,7 @@ import { FUTURE_TOLERANCE_MS } from '@/lib/domain/meter';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { Refusal, refuseField } from '@/lib/errors';
 import type { CheckOut, CreateCheckOut } from '@/lib/schemas/check-out';
-import { toTenths } from '@/lib/schemas/schedule-shape';
+import { toHours, toTenths } from '@/lib/schemas/schedule-shape';
 import { accessUnit, requireAtDock, type Checked } from './access';
 import { settleInstant } from './keep-reading';
 import { refusingTaken } from './refusing-taken';
@@ -128,7 +128,7 @@ function toCheckOut(row: OutingRow): CheckOut {
     dockId: row.dock_id,
     at: row.started_at!.toISOString(),
     dueBackAt: row.due_back_at?.toISOString() ?? null,
-    plannedHours: row.planned_tenths === null ? null : row.planned_tenths / 10,
+    plannedHours: row.planned_tenths === null ? null : toHours(row.planned_tenths),
     renterReference: row.renter_reference,
   };
 }

@@ -6,6 +6,7 @@ import type { Context } from '@/lib/context';
 import { checkReading, formatTenths } from '@/lib/domain/meter';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { Refusal, refuseField } from '@/lib/errors';
+import { toTenths } from '@/lib/schemas/schedule-shape';
 import type { CloseTask } from '@/lib/schemas/task';
 import { refuseReading } from './refuse-reading';
 
@@ -49,7 +50,7 @@ export async function computeClosingMeter(
       );
     return { tenths: last.engine_hours_tenths, outings, reading: null };
   }
-  const tenths = Math.round(input.engineHours * 10);
+  const tenths = toTenths(input.engineHours);
   const review = checkHours(ctx, closing, tenths, last, next);
   if (tenths <= live.engine_hours_tenths) return { tenths, outings, reading: null };
   const base = live.base_tenths;

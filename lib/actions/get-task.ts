@@ -1,4 +1,5 @@
 import { findHeldSince, listClosures } from '@/db/queries/closures';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import { findRule } from '@/db/queries/rules';
 import { getTaskStanding, listTaskNotes } from '@/db/queries/tasks';
 import type { Context } from '@/lib/context';
@@ -22,7 +23,7 @@ export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
   return {
     ...task,
     modelName: row.model_name,
-    engineHours: row.meter_tenths / 10,
+    engineHours: toHours(row.meter_tenths),
     outings: row.meter_outings,
     readAt: row.meter_read_at.toISOString(),
     ruleWords: rule ? describeRule({ ...rule, window: rule.tolerance }, { holdsUnit: rule.holds_unit }) : [],

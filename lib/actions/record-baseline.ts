@@ -7,7 +7,7 @@ import { localDay } from '@/lib/domain/calendar-day';
 import { ruleApplies } from '@/lib/domain/rule';
 import { refuseField } from '@/lib/errors';
 import type { Baseline, RecordBaseline } from '@/lib/schemas/baseline';
-import { toTenths } from '@/lib/schemas/schedule-shape';
+import { toHours, toTenths } from '@/lib/schemas/schedule-shape';
 import { accessRule, accessUnit } from './access';
 import { assessAgain } from './assess-again';
 import { toBaseline } from './shape-baseline';
@@ -28,7 +28,7 @@ export async function recordBaseline(ctx: Context, unitId: string, input: Record
     if (input.closedOn > localDay(ctx.now, unit.time_zone)) throw refuseField('closedOn', 'is still to come');
     const engineHoursTenths = toTenths(input.engineHours);
     if (!meter || engineHoursTenths > meter.engine_hours_tenths)
-      throw refuseField('engineHours', `is more than the unit's ${unit.engine_hours_tenths / 10} h`);
+      throw refuseField('engineHours', `is more than the unit's ${toHours(unit.engine_hours_tenths)} h`);
     const outings = input.outings ?? (await getOutingsBy(trx, unitId, input.closedOn));
     if (outings > meter.outing_count)
       throw refuseField('outings', `is more than the unit's ${meter.outing_count} outings`);

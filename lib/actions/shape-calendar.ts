@@ -4,6 +4,7 @@ import { placeOnCalendar } from '@/lib/domain/calendar-events';
 import { computeWorstState } from '@/lib/domain/due';
 import { computePointStanding, findDueDay, toDuePoint, type PointStanding } from '@/lib/domain/duty-standing';
 import type { CalendarDuty, CalendarEvent } from '@/lib/schemas/calendar';
+import { toHours } from '@/lib/schemas/schedule-shape';
 
 /** An open task or a duty without one as the calendar shows it, and the day it stands on, null for none. */
 export function toOpenWork(row: OpenWorkRow, now: Date): { on: CalendarDay | null; duty: CalendarDuty } {
@@ -22,7 +23,7 @@ export function toOpenWork(row: OpenWorkRow, now: Date): { on: CalendarDay | nul
     title: row.title,
     state: state ?? 'open',
     dueOn,
-    dueAtHours: hours?.point.on === 'engine_hours' ? hours.point.dueTenths / 10 : null,
+    dueAtHours: hours?.point.on === 'engine_hours' ? toHours(hours.point.dueTenths) : null,
     dueAtOutings: outings?.point.on === 'outings' ? outings.point.dueOutings : null,
     ...spanOf(row, standings, dueOn),
     fleetNumber: row.fleet_number,
@@ -32,7 +33,7 @@ export function toOpenWork(row: OpenWorkRow, now: Date): { on: CalendarDay | nul
     holdsUnit: row.defect_holds === true || (row.rule_holds === true && state === 'overdue'),
     started: row.started,
     revision: row.revision,
-    leftHours: hours ? hours.left / 10 : null,
+    leftHours: hours ? toHours(hours.left) : null,
     leftOutings: outings ? outings.left : null,
   };
   return { on: placeOnCalendar({ plannedOn: row.planned_on, state, dueOn, today }), duty };

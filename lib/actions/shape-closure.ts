@@ -1,4 +1,5 @@
 import type { ClosureRow } from '@/db/queries/closures';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import type { Closure } from '@/lib/schemas/task';
 import { toNamed } from './shape-task';
 
@@ -11,7 +12,7 @@ export function toClosure(row: ClosureRow): Closure {
     ruleId: row.rule_id,
     closedAt: row.closed_at.toISOString(),
     closedOn: row.closed_on,
-    engineHours: row.engine_hours_tenths / 10,
+    engineHours: toHours(row.engine_hours_tenths),
     outings: row.outings,
     minutes: row.minutes,
     note: row.note,

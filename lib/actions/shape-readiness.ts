@@ -3,6 +3,7 @@ import type { CalendarDay } from '@/lib/domain/calendar-day';
 import { localDay } from '@/lib/domain/calendar-day';
 import { describeHold, describeLift, findNearestRule, type Hold } from '@/lib/domain/readiness';
 import type { HoldShown, ReadyUnit } from '@/lib/schemas/availability';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import { toDuePoint } from '@/lib/domain/duty-standing';
 
 /** When and for how long somebody means to go out; `onDay` null is today at the unit's dock. */
@@ -29,8 +30,8 @@ export function toStanding(row: ReadinessRow): ReadyUnit {
     modelName: row.model_name,
     carbCount: row.carb_count,
     dockId: row.dock_id,
-    engineHours: row.engine_hours_tenths / 10,
-    hoursToHold: row.tenths_to_hold === null ? null : row.tenths_to_hold / 10,
+    engineHours: toHours(row.engine_hours_tenths),
+    hoursToHold: row.tenths_to_hold === null ? null : toHours(row.tenths_to_hold),
     outingsToHold: row.outings_to_hold,
     daysToHold: row.days_to_hold,
     holdingRuleId,

@@ -1,4 +1,5 @@
 import type { TaskNoteRow, TaskStandingRow } from '@/db/queries/tasks';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import { localDay, type CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePoint } from '@/lib/domain/due';
 import { computePointStanding, toDuePoint, type PointStanding } from '@/lib/domain/duty-standing';
@@ -72,7 +73,7 @@ function toClosed(row: TaskStandingRow): Task['closed'] {
     closureId: closure_id,
     closedAt: closed_at.toISOString(),
     closedOn: closed_on,
-    engineHours: closed_tenths / 10,
+    engineHours: toHours(closed_tenths),
     closedBy: toNamed(row.closed_by, row.closer_name),
   };
 }
@@ -90,7 +91,7 @@ function toTaskDuePoint({ point, state, left, leftToOverdue }: PointStanding): T
 
 function dueOf(point: DuePoint): Pick<TaskDuePoint, 'dueAtHours' | 'dueAtOutings' | 'dueOn'> {
   return {
-    dueAtHours: point.on === 'engine_hours' ? point.dueTenths / 10 : null,
+    dueAtHours: point.on === 'engine_hours' ? toHours(point.dueTenths) : null,
     dueAtOutings: point.on === 'outings' ? point.dueOutings : null,
     dueOn: point.on === 'calendar' ? point.dueOn : null,
   };

@@ -1,4 +1,5 @@
 import type { UnitRow } from '@/db/queries/units';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import type { ScopedUnit } from '@/lib/domain/rule';
 import type { Unit } from '@/lib/schemas/unit';
 
@@ -14,7 +15,7 @@ export function toUnit(row: UnitRow): Unit {
     hin: row.hin,
     registration: row.registration,
     enteredServiceOn: row.entered_service_on,
-    engineHours: row.engine_hours_tenths / 10,
+    engineHours: toHours(row.engine_hours_tenths),
     outings: row.outing_count,
     carbCount: row.carb_count,
     readAt: row.read_at.toISOString(),
