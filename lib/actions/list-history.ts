@@ -1,9 +1,9 @@
 import { listHistory as listHistoryRows } from '@/db/queries/history';
 import type { Context } from '@/lib/context';
-import { refuseField } from '@/lib/errors';
-import { readCursor, writeCursor } from '@/lib/schemas/cursor';
+import { writeCursor } from '@/lib/schemas/cursor';
 import { historyPlace, type HistoryEntry, type HistoryQuery } from '@/lib/schemas/history';
 import { accessUnit } from './access';
+import { pageAfter } from './page-after';
 
 const PAGE = 30;
 
@@ -18,8 +18,7 @@ export async function listHistory(
   query: HistoryQuery,
 ): Promise<{ items: HistoryEntry[]; nextCursor: string | null }> {
   const unit = await accessUnit(ctx, unitId, 'unit.read');
-  const after = query.cursor === undefined ? null : readCursor(historyPlace, query.cursor);
-  if (query.cursor !== undefined && !after) throw refuseField('cursor', 'is none that a list answered');
+  const after = pageAfter(historyPlace, query.cursor);
   const limit = query.limit ?? PAGE;
   const rows = await listHistoryRows(ctx.db, unit.id, { kind: query.kind ?? null, after, limit: limit + 1 });
   const items = rows

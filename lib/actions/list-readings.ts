@@ -7,8 +7,10 @@ import {
 import type { Context } from '@/lib/context';
 import { visibleDocks } from '@/lib/domain/access';
 import { refuseField } from '@/lib/errors';
+import { instantPlace, writeCursor } from '@/lib/schemas/cursor';
 import type { Reading, ReadingsQuery } from '@/lib/schemas/reading';
 import { accessUnit, requireSomewhere } from './access';
+import { pageAfter } from './page-after';
 import { toReading } from './shape-reading';
 
 const PAGE = 100;
@@ -23,11 +25,12 @@ export async function listReadings(
   query: ReadingsQuery,
 ): Promise<{ items: Reading[]; nextCursor: string | null }> {
   const limit = query.limit ?? PAGE;
-  const after = parseCursor(query.cursor);
+  const place = pageAfter(instantPlace, query.cursor);
+  const after = place && { takenAt: new Date(place.at), id: place.id };
   const rows = await chosen(ctx, query, after, limit + 1);
   const items = rows.slice(0, limit).map(toReading);
   const last = rows.length > limit ? items.at(-1) : undefined;
-  return { items, nextCursor: last ? `${last.at}_${last.id}` : null };
+  return { items, nextCursor: last ? writeCursor({ at: last.at, id: last.id }) : null };
 }
 
 async function chosen(
@@ -45,13 +48,4 @@ async function chosen(
   }
   if (query.review) return listReadingsToReview(ctx.db, { dockIds: visibleDocks(ctx.actor) }, after, limit);
   throw refuseField('unitId', 'name a unit, or ask for review=open');
-}
-
-function parseCursor(cursor: string | undefined): After {
-  if (cursor === undefined) return null;
-  const [at = '', id = ''] = cursor.split('_');
-  const takenAt = new Date(at);
-  if (Number.isNaN(takenAt.getTime()) || !/^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/.test(id))
-    throw refuseField('cursor', 'is none that a list answered');
-  return { takenAt, id };
 }

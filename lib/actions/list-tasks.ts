@@ -2,10 +2,10 @@ import { listAllTasks, listEndedTasks, listOpenTasks, type TaskFilter } from '@/
 import type { Context } from '@/lib/context';
 import { personIdOf, visibleDocks } from '@/lib/domain/access';
 import { compareUrgency, type UrgentTask } from '@/lib/domain/urgency';
-import { refuseField } from '@/lib/errors';
-import { readCursor, writeCursor } from '@/lib/schemas/cursor';
-import { instantPlace, urgentPlace, type Task, type TasksQuery } from '@/lib/schemas/task';
+import { instantPlace, writeCursor } from '@/lib/schemas/cursor';
+import { urgentPlace, type Task, type TasksQuery } from '@/lib/schemas/task';
 import { requireAtDock } from './access';
+import { pageAfter } from './page-after';
 import { toTask } from './shape-task';
 
 type Page = { items: Task[]; nextCursor: string | null };
@@ -37,7 +37,7 @@ async function pageByUrgency(
   cursor: string | undefined,
   limit: number,
 ): Promise<Page> {
-  const after = cursor === undefined ? null : (readCursor(urgentPlace, cursor) ?? refuseCursor());
+  const after = pageAfter(urgentPlace, cursor);
   const rows = await listOpenTasks(ctx.db, filter);
   const tasks = rows.map((row) => toTask(row, ctx.now)).sort((a, b) => compareUrgency(keyOf(a), keyOf(b)));
   const rest = after ? tasks.filter((task) => compareUrgency(keyOf(task), after) > 0) : tasks;
@@ -51,7 +51,7 @@ async function pageByInstant(
   filter: TaskFilter,
   { state, cursor, limit }: { state: 'closed' | 'all'; cursor: string | undefined; limit: number },
 ): Promise<Page> {
-  const key = cursor === undefined ? null : (readCursor(instantPlace, cursor) ?? refuseCursor());
+  const key = pageAfter(instantPlace, cursor);
   const after = key && { at: new Date(key.at), id: key.id };
   const list = state === 'closed' ? listEndedTasks : listAllTasks;
   const rows = await list(ctx.db, filter, after, limit + 1);
@@ -64,8 +64,4 @@ async function pageByInstant(
 function keyOf(task: Task): UrgentTask {
   const { id, plannedOn, openedAt, fleetNumber } = task;
   return { id, plannedOn, openedAt, fleetNumber, urgency: task.urgency ?? 'later' };
-}
-
-function refuseCursor(): never {
-  throw refuseField('cursor', 'is not a cursor this list answered');
 }

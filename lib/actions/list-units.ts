@@ -2,10 +2,10 @@ import { listUnits as listUnitRows, type UnitRow } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
 import { visibleDocks } from '@/lib/domain/access';
 import { compareFleetNumbers } from '@/lib/domain/natural-order';
-import { refuseField } from '@/lib/errors';
-import { readCursor, writeCursor } from '@/lib/schemas/cursor';
+import { writeCursor } from '@/lib/schemas/cursor';
 import { unitPlace, type Unit, type UnitsQuery } from '@/lib/schemas/unit';
 import { requireAtDock } from './access';
+import { pageAfter } from './page-after';
 import { toUnit } from './shape-unit';
 
 type Place = { fleetNumber: string; id: string };
@@ -19,8 +19,7 @@ export async function listUnits(
   query: UnitsQuery,
 ): Promise<{ items: Unit[]; nextCursor: string | null }> {
   if (query.dockId) requireAtDock(ctx, 'unit.read', query.dockId, 'dockId');
-  const after = query.cursor === undefined ? null : readCursor(unitPlace, query.cursor);
-  if (query.cursor !== undefined && !after) throw refuseField('cursor', 'is none that a list answered');
+  const after = pageAfter(unitPlace, query.cursor);
   const rows = await listUnitRows(ctx.db, query.dockId ? [query.dockId] : visibleDocks(ctx.actor));
   const rest = rows
     .sort((a, b) => compare(placeOf(a), placeOf(b)))

@@ -58,7 +58,7 @@ export const tasksQuery = z.object({
   ...pageQuery,
 });
 
-/** Where a page of open tasks ended, by urgency; and one of closed or all tasks. */
+/** Where a page of open tasks ended, by urgency. */
 export const urgentPlace = z.object({
   id: z.uuid(),
   urgency: z.enum(URGENCIES),
@@ -66,7 +66,6 @@ export const urgentPlace = z.object({
   openedAt: z.iso.datetime(),
   fleetNumber: z.string(),
 });
-export const instantPlace = z.object({ at: z.iso.datetime(), id: z.uuid() });
 
 const named = z.object({ id, name: z.string() }).nullable();
 

@@ -272,6 +272,7 @@ const questions: [path: string, field: string, status?: number][] = [
   [`/readings?unitId=${nobody}`, 'unitId', 404],
   ['/readings?review=all', 'review'],
   ['/readings?review=open&cursor=x', 'cursor'],
+  [`/readings?review=open&cursor=2026-06-02T11:00:00.000Z_${nobody}`, 'cursor'],
   ['/readings?review=open&limit=0', 'limit'],
   ['/defects?open=maybe', 'open'],
   ['/defects?unitId=x', 'unitId'],
