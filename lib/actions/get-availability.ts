@@ -1,10 +1,9 @@
 import { listReadiness } from '@/db/queries/readiness';
 import type { Context } from '@/lib/context';
-import { visibleDocks } from '@/lib/domain/access';
 import { compareFleetNumbers } from '@/lib/domain/natural-order';
 import type { Availability, AvailabilityQuery } from '@/lib/schemas/availability';
 import { toTenths } from '@/lib/schemas/schedule-shape';
-import { accessDock } from './access';
+import { docksAsked } from './docks-asked';
 import { toHolds, toStanding } from './shape-readiness';
 
 /**
@@ -13,9 +12,7 @@ import { toHolds, toStanding } from './shape-readiness';
  * their fleet numbers. Throws `not_found` or `forbidden` on `dockId`.
  */
 export async function getAvailability(ctx: Context, query: AvailabilityQuery): Promise<Availability> {
-  const dockIds = query.dockId
-    ? [(await accessDock(ctx, query.dockId, 'unit.read')).id]
-    : visibleDocks(ctx.actor);
+  const dockIds = await docksAsked(ctx, query.dockId, 'unit.read');
   const onDay = query.on ?? null;
   const plannedTenths = query.hours === undefined ? null : toTenths(query.hours);
   const rows = await listReadiness(ctx.db, { dockIds }, ctx.now, onDay);

@@ -1,9 +1,8 @@
 import { getFreshAsOf, listClosedWork, listOpenWork } from '@/db/queries/calendar';
 import type { Context } from '@/lib/context';
-import { visibleDocks } from '@/lib/domain/access';
 import { USUAL_PACE } from '@/lib/domain/readiness';
 import type { Calendar, CalendarQuery } from '@/lib/schemas/calendar';
-import { requireAtDock } from './access';
+import { docksAsked } from './docks-asked';
 import { toClosedEvent, toOpenWork } from './shape-calendar';
 
 /** At most this many duties that go by meters, have no task yet and no day are listed: the nearest. */
@@ -12,12 +11,12 @@ export const UNDATED_LIMIT = 50;
 /**
  * What stands on the calendar from one day to another, both included, at the docks the actor works at: one event for
  * each open task and duty (placed by lib/domain/calendar-events.ts) and for each task closed in those days. Work
- * without a day is in `undated`. `freshAsOf`: every fact recorded until then is in it. Throws `forbidden` on `dockId`.
+ * without a day is in `undated`. `freshAsOf`: every fact recorded until then is in it. Throws `not_found` or
+ * `forbidden` on `dockId`.
  */
 export async function getCalendar(ctx: Context, query: CalendarQuery): Promise<Calendar> {
   const { from, to, dockId } = query;
-  if (dockId) requireAtDock(ctx, 'task.read', dockId, 'dockId');
-  const range = { dockIds: dockId ? [dockId] : visibleDocks(ctx.actor), from, to };
+  const range = { dockIds: await docksAsked(ctx, dockId, 'task.read'), from, to };
   const freshAsOf = await getFreshAsOf(ctx.db, ctx.now);
   const [open, closed] = await Promise.all([
     listOpenWork(ctx.db, range, { now: ctx.now, nearest: UNDATED_LIMIT, pace: USUAL_PACE }),

@@ -1,10 +1,10 @@
 import { listAllTasks, listEndedTasks, listOpenTasks, type TaskFilter } from '@/db/queries/tasks';
 import type { Context } from '@/lib/context';
-import { personIdOf, visibleDocks } from '@/lib/domain/access';
+import { personIdOf } from '@/lib/domain/access';
 import { compareUrgency, type UrgentTask } from '@/lib/domain/urgency';
 import { instantPlace, writeCursor } from '@/lib/schemas/cursor';
 import { urgentPlace, type Task, type TasksQuery } from '@/lib/schemas/task';
-import { requireAtDock } from './access';
+import { docksAsked } from './docks-asked';
 import { pageAfter } from './page-after';
 import { toTask } from './shape-task';
 
@@ -13,13 +13,12 @@ const PAGE = 100;
 
 /**
  * Tasks at the docks the actor works at, in pages: open ones by urgency, closed ones with the last closed first,
- * all with the last opened first. Throws `forbidden` on `dockId`, `invalid_input` on `cursor`.
+ * all with the last opened first. Throws `not_found` or `forbidden` on `dockId`, `invalid_input` on `cursor`.
  */
 export async function listTasks(ctx: Context, query: TasksQuery): Promise<Page> {
-  if (query.dockId) requireAtDock(ctx, 'task.read', query.dockId, 'dockId');
   const by = personIdOf(ctx.actor);
   const filter: TaskFilter = {
-    dockIds: query.dockId ? [query.dockId] : visibleDocks(ctx.actor),
+    dockIds: await docksAsked(ctx, query.dockId, 'task.read'),
     unitId: query.unitId,
     kind: query.kind,
     ...(query.mine === 'true' && by && { startedBy: by }),

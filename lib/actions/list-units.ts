@@ -1,10 +1,9 @@
 import { listUnits as listUnitRows, type UnitRow } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
-import { visibleDocks } from '@/lib/domain/access';
 import { compareFleetNumbers } from '@/lib/domain/natural-order';
 import { writeCursor } from '@/lib/schemas/cursor';
 import { unitPlace, type Unit, type UnitsQuery } from '@/lib/schemas/unit';
-import { requireAtDock } from './access';
+import { docksAsked } from './docks-asked';
 import { pageAfter } from './page-after';
 import { toUnit } from './shape-unit';
 
@@ -12,15 +11,15 @@ type Place = { fleetNumber: string; id: string };
 
 /**
  * The units of the docks the actor works at, in the natural order of their fleet numbers; `dockId` narrows them, and
- * without a `limit` all are answered. Throws `forbidden` on `dockId`, `invalid_input` on `cursor`.
+ * without a `limit` all are answered. Throws `not_found` or `forbidden` on `dockId`, `invalid_input` on `cursor`.
  */
 export async function listUnits(
   ctx: Context,
   query: UnitsQuery,
 ): Promise<{ items: Unit[]; nextCursor: string | null }> {
-  if (query.dockId) requireAtDock(ctx, 'unit.read', query.dockId, 'dockId');
+  const dockIds = await docksAsked(ctx, query.dockId, 'unit.read');
   const after = pageAfter(unitPlace, query.cursor);
-  const rows = await listUnitRows(ctx.db, query.dockId ? [query.dockId] : visibleDocks(ctx.actor));
+  const rows = await listUnitRows(ctx.db, dockIds);
   const rest = rows
     .sort((a, b) => compare(placeOf(a), placeOf(b)))
     .filter((row) => !after || compare(placeOf(row), after) > 0);

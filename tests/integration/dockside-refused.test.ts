@@ -265,6 +265,9 @@ test.each(bodies)('%s %s refuses a body that nobody can read', async (method, pa
 const questions: [path: string, field: string, status?: number][] = [
   ['/availability?dockId=north', 'dockId'],
   [`/availability?dockId=${nobody}`, 'dockId', 404],
+  [`/tasks?dockId=${nobody}`, 'dockId', 404],
+  [`/units?dockId=${nobody}`, 'dockId', 404],
+  [`/calendar?from=2026-06-01&to=2026-06-30&dockId=${nobody}`, 'dockId', 404],
   ['/availability?on=2026-02-29', 'on'],
   ['/availability?hours=-1', 'hours'],
   ['/availability?hours=two', 'hours'],
@@ -335,6 +338,14 @@ describe('somebody else’s dock', () => {
     { method: 'POST', path: '/lay-ups/@LAY-UP/ending', status: 403 },
     { method: 'GET', path: '/units/@AWAY', status: 403 },
     { method: 'GET', path: '/availability?dockId=@AWAY-DOCK', status: 403, field: 'dockId' },
+    { method: 'GET', path: '/tasks?dockId=@AWAY-DOCK', status: 403, field: 'dockId' },
+    { method: 'GET', path: '/units?dockId=@AWAY-DOCK', status: 403, field: 'dockId' },
+    {
+      method: 'GET',
+      path: '/calendar?from=2026-06-01&to=2026-06-30&dockId=@AWAY-DOCK',
+      status: 403,
+      field: 'dockId',
+    },
   ];
   test.each(away)('$method $path is forbidden there', async (bad) => {
     await expectRefused(database.db, mechanic, filled(bad));
