@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { checkIn } from '@/lib/actions/check-in';
 import { checkOut } from '@/lib/actions/check-out';
+import { createDock } from '@/lib/actions/create-dock';
 import { createRule } from '@/lib/actions/create-rule';
 import { createUnit } from '@/lib/actions/create-unit';
 import { endLayUp } from '@/lib/actions/end-lay-up';
@@ -92,6 +93,25 @@ test('a day that comes holds the unit at the dock’s midnight, and tomorrow can
     { holds: [{ reason: 'overdue', since: '2026-06-02T23:00:00.000Z' }] },
   ]);
   expect((await ask({ on: '2026-06-03' })).held).toMatchObject([{ unitId, daysToHold: 0 }]);
+});
+
+describe('a day that is over', () => {
+  const refused = { code: 'invalid_input', errors: [{ path: 'on' }] };
+
+  test('at the dock is refused, its today is not', async () => {
+    await expect(ask({ on: '2026-06-01' })).rejects.toMatchObject(refused);
+    expect((await ask({ on: '2026-06-02' })).ready).toHaveLength(1);
+    // Lisbon's midnight of 3 June is 23:00 UTC of the 2nd.
+    await expect(ask({ on: '2026-06-02' }, '23:00')).rejects.toMatchObject(refused);
+  });
+
+  test('at one dock may be asked about while it is today at another', async () => {
+    const west = await createDock(at('09:00'), { name: 'Pelican Pier', timeZone: 'America/New_York' });
+    // At 23:00 UTC it is the evening of the 2nd in New York.
+    expect((await ask({ on: '2026-06-02' }, '23:00')).ready).toHaveLength(1);
+    expect((await ask({ on: '2026-06-02', dockId: west.id }, '23:00')).ready).toEqual([]);
+    await expect(ask({ on: '2026-06-02', dockId: opened.dock.id }, '23:00')).rejects.toMatchObject(refused);
+  });
 });
 
 describe('a planned outing', () => {

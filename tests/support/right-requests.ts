@@ -88,7 +88,7 @@ function ofDockside(world: World): Record<string, RightRequest> {
   const { home, unitId, outingUnitId } = world;
   return {
     getAvailability: {
-      query: { dockId: home.dock.id, on: '2026-12-24', hours: '1.5' },
+      query: { dockId: home.dock.id, on: '2099-12-24', hours: '1.5' },
       roles: EVERYONE,
       ...refused,
     },
