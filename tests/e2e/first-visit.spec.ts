@@ -3,7 +3,7 @@ import { setUp } from '@/lib/actions/set-up';
 import type { Mailbox } from '../fakes/mailbox';
 import { asSystem } from '../support/crew';
 import { expect, SETUP_TOKEN, test } from '../support/e2e';
-import { expectAccessible, openPage } from '../support/pages';
+import { expectAccessible, openPage, sendSignIn } from '../support/pages';
 
 const PASSWORD = 'otters-under-the-jetty';
 const NEW_PASSWORD = 'a-heron-on-the-mooring';
@@ -23,12 +23,6 @@ async function followLetter(page: Page, mailbox: Mailbox, subject: string, to: s
   const link = page.frameLocator('iframe').getByRole('link');
   const href = await link.getAttribute('href');
   await page.goto(href ?? '');
-}
-
-async function signIn(page: Page, email: string, password: string): Promise<void> {
-  await page.getByLabel('E-mail').fill(email);
-  await page.getByLabel('Password', { exact: true }).fill(password);
-  await page.getByRole('button', { name: 'Sign in' }).click();
 }
 
 test('the first visitor sets the product up with the token, and is led to the first model, unit and rule', async ({
@@ -122,7 +116,7 @@ test('somebody invited chooses a password by the letter, and a new one when it i
 
   await test.step('the manager invites a dock hand', async () => {
     await office.goto('/people');
-    await signIn(office, manager.email, PASSWORD);
+    await sendSignIn(office, manager.email, PASSWORD);
     await office.getByRole('button', { name: 'Invite somebody' }).click();
     await office.getByLabel('Name').fill('Ada Reef');
     await office.getByLabel('E-mail address').fill(ada);
@@ -167,9 +161,9 @@ test('somebody invited chooses a password by the letter, and a new one when it i
     await home.getByLabel('New password').fill(NEW_PASSWORD);
     await home.getByRole('button', { name: 'Change the password' }).click();
     await expect(home.getByText('Your password is changed. Sign in with the new one.')).toBeVisible();
-    await signIn(home, ada, PASSWORD);
+    await sendSignIn(home, ada, PASSWORD);
     await expect(home.getByRole('alert').filter({ hasText: /password/i })).toBeVisible();
-    await signIn(home, ada, NEW_PASSWORD);
+    await sendSignIn(home, ada, NEW_PASSWORD);
     await expect(home.getByText('No unit at Cedar Point yet')).toBeVisible();
     await phone.goto('/board');
     await expect(phone.getByRole('heading', { name: 'Sign in to Tidewater Hire' })).toBeVisible();

@@ -1,8 +1,8 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Page } from '@playwright/test';
 import { createPerson } from '@/lib/actions/create-person';
 import { asSystem, openDock } from '../support/crew';
 import { expect, test, type Running } from '../support/e2e';
+import { expectAccessible } from '../support/pages';
 import { signIn } from '../support/sign-in';
 
 const manager = { name: 'Ines Marlow', email: 'ines@wakewright.example', password: 'three-docks-afloat' };
@@ -59,7 +59,7 @@ test('a rule says what it means and when it would be due while it is typed, and 
   await expect(page.getByText('0 of 1 units')).toBeVisible();
   await page.getByLabel('Carburettors, at least').fill('2');
   await expect(page.getByText('1 of 1 units')).toBeVisible();
-  expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+  await expectAccessible(page);
 
   await page.getByRole('button', { name: 'Save the rule' }).click();
   await expect(page.getByText('“Carburettor rebuild” is saved for 1 unit.')).toBeVisible();
@@ -102,5 +102,5 @@ test('what was done before a unit came is recorded, and frees it', async ({ empt
   await page.getByRole('button', { name: 'Save all that are filled in' }).click();
   await expect(page.getByText('1 baseline recorded for N-1.')).toBeVisible();
   await expect(page.getByRole('row', { name: /Oil and filter/ })).toContainText('Mon 20 Apr 2026');
-  expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+  await expectAccessible(page);
 });

@@ -1,5 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
-import type { Page } from '@playwright/test';
 import { createDock } from '@/lib/actions/create-dock';
 import { createPerson } from '@/lib/actions/create-person';
 import { createRule } from '@/lib/actions/create-rule';
@@ -7,21 +5,9 @@ import { setUp } from '@/lib/actions/set-up';
 import { SYSTEM } from '@/lib/domain/access';
 import { createRule as createRuleInput } from '@/lib/schemas/rule';
 import { expect, test } from '../support/e2e';
+import { expectAccessible, sendSignIn } from '../support/pages';
 
 const PASSWORD = 'otters-under-the-jetty';
-
-async function signIn(page: Page, baseUrl: string, email: string): Promise<void> {
-  await page.goto(`${baseUrl}/sign-in`);
-  await page.getByLabel('E-mail').fill(email);
-  await page.getByLabel('Password', { exact: true }).fill(PASSWORD);
-  await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-}
-
-async function expectNoBarrier(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
-}
 
 test('a manager adds the first unit, mends its hull number, and sees it held until it is assessed', async ({
   page,
@@ -45,11 +31,13 @@ test('a manager adds the first unit, mends its hull number, and sees it held unt
       triggers: [{ on: 'engine_hours', every: 50 }],
     }),
   );
-  await signIn(page, app.baseUrl, manager.email);
+  await page.goto(`${app.baseUrl}/sign-in`);
+  await sendSignIn(page, manager.email, PASSWORD);
+  await page.waitForURL((url) => url.pathname !== '/sign-in');
 
   await test.step('an empty fleet leads to the first unit, and that to its model', async () => {
     await page.goto(`${app.baseUrl}/units`);
-    await expectNoBarrier(page);
+    await expectAccessible(page);
     await page.getByRole('link', { name: 'Add the first unit' }).click();
     await page.getByRole('link', { name: 'Add a model' }).click();
     await page.getByLabel('Name').fill('Twin 800');
@@ -61,7 +49,7 @@ test('a manager adds the first unit, mends its hull number, and sees it held unt
     await page.getByLabel('Least').fill('150');
     await page.getByLabel('Most').fill('180');
     await page.getByLabel('In', { exact: true }).fill('psi');
-    await expectNoBarrier(page);
+    await expectAccessible(page);
     await page.getByRole('button', { name: 'Add the model' }).click();
     await expect(page.getByRole('link', { name: 'Twin 800', exact: true })).toBeVisible();
   });
@@ -79,7 +67,7 @@ test('a manager adds the first unit, mends its hull number, and sees it held unt
       /characters 4 to 8, has no letters I, O or Q/,
     );
     await expect(page.getByLabel('Registration')).toHaveValue('nh1234bd');
-    await expectNoBarrier(page);
+    await expectAccessible(page);
   });
 
   await test.step('mended, the unit is there, and held until the worker has assessed it', async () => {
@@ -89,7 +77,7 @@ test('a manager adds the first unit, mends its hull number, and sees it held unt
     await expect(page.getByRole('region', { name: 'State' })).toContainText('Held');
     await expect(page.getByRole('region', { name: 'State' })).toContainText('Not yet assessed');
     await expect(page.getByText('NH 1234 BD')).toBeVisible();
-    await expectNoBarrier(page);
+    await expectAccessible(page);
     app.worker.start();
     await expect(async () => {
       await page.reload();
@@ -122,13 +110,13 @@ test('a manager adds the first unit, mends its hull number, and sees it held unt
     await expect(page.getByRole('region', { name: 'Meter' })).toContainText('12.9 h');
     await page.getByRole('link', { name: 'Readings' }).click();
     await expect(page.getByText('Corrected reading: 12.9 h')).toBeVisible();
-    await expectNoBarrier(page);
+    await expectAccessible(page);
   });
 
   await test.step('the fleet’s list shows it on the water line, and narrows to a state', async () => {
     await page.goto(`${app.baseUrl}/units`);
     await expect(page.getByRole('table', { name: 'Units' })).toContainText('Waits for a new hatch');
-    await expectNoBarrier(page);
+    await expectAccessible(page);
     await page.getByLabel('State').selectOption('Ready');
     await page.getByRole('button', { name: 'Show', exact: true }).click();
     await expect(page.getByText('No unit fits what you chose')).toBeVisible();
@@ -166,16 +154,18 @@ test('a dock hand reads units and docks, and is offered nothing to change', asyn
     password: PASSWORD,
   } as const;
   await createPerson(ctx, hand);
-  await signIn(page, app.baseUrl, hand.email);
+  await page.goto(`${app.baseUrl}/sign-in`);
+  await sendSignIn(page, hand.email, PASSWORD);
+  await page.waitForURL((url) => url.pathname !== '/sign-in');
   await page.goto(`${app.baseUrl}/units`);
   await expect(page.getByText('A manager adds the first one.')).toBeVisible();
   expect((await page.goto(`${app.baseUrl}/units/new`))?.status()).toBe(404);
   await page.goto(`${app.baseUrl}/docks`);
   await expect(page.getByRole('link', { name: 'Heron Quay', exact: true })).toBeVisible();
-  await expectNoBarrier(page);
+  await expectAccessible(page);
   await page.getByRole('link', { name: 'Heron Quay', exact: true }).click();
   await expect(page.getByLabel('Time zone')).toHaveValue('America/Chicago');
   await expect(page.getByLabel('Time zone')).toBeDisabled();
   await expect(page.getByRole('button', { name: 'Save' })).toHaveCount(0);
-  await expectNoBarrier(page);
+  await expectAccessible(page);
 });

@@ -28,6 +28,13 @@ export async function pageOf(browser: Browser, running: Running, role: Role, wid
   return page;
 }
 
+/** Fills in the form of the sign-in page that is open, and sends it. */
+export async function sendSignIn(page: Page, email: string, password: string): Promise<void> {
+  await page.getByLabel('E-mail address').fill(email);
+  await page.getByLabel('Password', { exact: true }).fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+}
+
 /** Types a number on the dock's keypad. */
 export async function typeHours(page: Page, number: string): Promise<void> {
   for (const key of number) {

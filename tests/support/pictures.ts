@@ -1,5 +1,5 @@
 import { chromium, type Page } from '@playwright/test';
-import { typeHours } from './pages';
+import { sendSignIn, typeHours } from './pages';
 
 /**
  * `npx tsx tests/support/pictures.ts http://127.0.0.1:3000`: takes the pictures of the README anew from a demo that
@@ -49,9 +49,7 @@ async function picture(
   const context = await browser.newContext({ baseURL: base, viewport });
   const page = await context.newPage();
   await page.goto('/sign-in');
-  await page.getByLabel('E-mail address').fill(`${role}@wakewright.example`);
-  await page.getByLabel('Password').fill('three-docks-afloat');
-  await page.getByRole('button', { name: 'Sign in' }).click();
+  await sendSignIn(page, `${role}@wakewright.example`, 'three-docks-afloat');
   await page.waitForURL((url) => url.pathname !== '/sign-in');
   await open(page);
   await page.waitForLoadState('networkidle');
