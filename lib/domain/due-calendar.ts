@@ -31,10 +31,29 @@ function seriesFromStart(trigger: CalendarTrigger): Series {
   return series;
 }
 
+/**
+ * The occurrences of a series with COUNT that were found so far, which are counted from its start, and the rest of
+ * them: each is looked for once, however many closings are replayed.
+ */
+const counted = new WeakMap<Series, { found: number[]; rest: Generator<number> }>();
+
+/** The first so many occurrences of a series with COUNT, up to the first on `from` or later where there is one. */
+function countTo(series: Series, from: number): readonly number[] {
+  let known = counted.get(series);
+  if (!known) counted.set(series, (known = { found: [], rest: numbersBetween(series, series.start) }));
+  while ((known.found.at(-1) ?? -Infinity) < from) {
+    const next = known.rest.next();
+    if (next.done) break;
+    known.found.push(next.value);
+  }
+  return known.found;
+}
+
 /** First occurrences that were looked for already, by the day from which on: those of many units are the same. */
 const firsts = new WeakMap<Series, Map<number, number | null>>();
 
 function firstOf(series: Series, from: number): number | null {
+  if (series.rule.count !== null) return countTo(series, from).find((number) => number >= from) ?? null;
   if (isPlain(series.rule)) return firstNumberFrom(series, from);
   let known = firsts.get(series);
   if (!known) firsts.set(series, (known = new Map()));
@@ -55,19 +74,19 @@ export function beginCalendar(trigger: CalendarTrigger, enteredServiceOn: Calend
  * up to now is used up, and the day of the closing itself, where it fits the rule, must not use up one more.
  */
 function withCountLeft(series: Series, due: number, on: number): Recurrence | null {
-  const { rule, start } = series;
+  const { rule } = series;
   if (rule.count === null) return rule;
-  const left = rule.count - [...numbersBetween(series, start, due)].length;
+  const left = rule.count - countTo(series, due).filter((number) => number <= due).length;
   if (left <= 0) return null;
   const endless = seriesOf({ ...rule, count: null }, on, 'backward');
-  return { ...rule, count: firstNumberFrom(endless, on) === on ? left + 1 : left };
+  return { ...rule, count: numbersBetween(endless, on, on).next().done ? left : left + 1 };
 }
 
 function restart({ anchor, series, due }: CalendarCursor, on: number): CalendarCursor {
   const rule = due === null ? null : withCountLeft(series, due, on);
   if (rule === null) return { anchor, series, due: null };
   const next = seriesOf(rule, on, 'backward');
-  return { anchor, series: next, due: firstNumberFrom(next, on + 1) };
+  return { anchor, series: next, due: firstOf(next, on + 1) };
 }
 
 /**

@@ -34,6 +34,28 @@ function firstWeekOf(year: number, weekStart: number): number {
   return fourth - intoWeek(fourth, weekStart);
 }
 
+/** The first day of the week a WEEKLY period is; day number 0 was a Thursday. */
+const beginOfWeek = (ordinal: number, weekStart: number) => ordinal * 7 + ((weekStart + 4) % 7);
+
+/**
+ * The period itself; or, where FREQ is DAILY or WEEKLY and all its days are in months the rule does not name, the
+ * first further on, in steps of INTERVAL, that reaches into one it names: so a day that comes once in many years is
+ * found without looking at all their days.
+ */
+export function skipMonths({ freq, interval, byMonth, weekStart }: Recurrence, ordinal: number): number {
+  if (byMonth.length === 0 || freq === 'MONTHLY' || freq === 'YEARLY') return ordinal;
+  const length = freq === 'DAILY' ? 1 : 7;
+  const begin = freq === 'DAILY' ? ordinal : beginOfWeek(ordinal, weekStart);
+  const { year, month } = partsOfNumber(begin);
+  const last = partsOfNumber(begin + length - 1);
+  if (byMonth.includes(month) || byMonth.includes(last.month)) return ordinal;
+  const ahead = Math.min(...byMonth.map((wanted) => (wanted > month ? wanted - month : wanted - month + 12)));
+  const target = year * 12 + month - 1 + ahead;
+  const wanted = numberOfDate(Math.floor(target / 12), (target % 12) + 1, 1);
+  const periods = Math.ceil((wanted - (begin + length - 1)) / (length * interval));
+  return ordinal + Math.max(periods, 0) * interval;
+}
+
 function fitsWeekNo({ byWeekNo, weekStart }: Recurrence, number: number): boolean {
   const begin = number - intoWeek(number, weekStart);
   const { year } = partsOfNumber(begin + 3);
@@ -120,7 +142,7 @@ export function daysOfPeriod(series: Series, ordinal: number): { begin: number; 
   });
   if (freq === 'DAILY') return expand(ordinal, daysFrom(series, ordinal, 1));
   if (freq === 'WEEKLY') {
-    const begin = ordinal * 7 + ((weekStart + 4) % 7); // day number 0 was a Thursday
+    const begin = beginOfWeek(ordinal, weekStart);
     return expand(begin, daysFrom(series, begin, 7));
   }
   if (freq === 'MONTHLY') {

@@ -16,7 +16,7 @@ import {
   numberOfDay,
   partsOfNumber,
 } from './calendar-day';
-import { type Series, type Skip, daysOfPeriod, periodOrdinal } from './recurrence-days';
+import { type Series, type Skip, daysOfPeriod, periodOrdinal, skipMonths } from './recurrence-days';
 import { PARTS, type PartName, type Recurrence, findClash } from './recurrence-parts';
 
 export type ParsedRecurrence =
@@ -110,6 +110,7 @@ function* periodSteps(series: Series, from: number, last: number): Generator<num
   let left = rule.count ?? Infinity;
   let limit = (rule.count === null ? Math.max(from, start) : start) + HORIZON_DAYS;
   for (; ; ordinal += rule.interval) {
+    ordinal = skipMonths(rule, ordinal);
     const { begin, days } = daysOfPeriod(series, ordinal);
     if (begin > Math.min(limit, last)) return;
     for (const number of days) {

@@ -102,6 +102,13 @@ export const endRule = z.strictObject({ reason: text(500).optional() });
 
 export const rulesQuery = z.object({ ended: z.enum(['include']).optional() });
 
+/** Work a preview asks for at most: closings and further points, times the calendar triggers that answer each. */
+const MOST_CALENDAR_STEPS = 500;
+
+/**
+ * Anybody signed in may ask, so the worst is bounded: 8 triggers, 200 closings, 50 further points, and of all of
+ * these together `MOST_CALENDAR_STEPS`.
+ */
 export const previewRule = z
   .strictObject({
     ...schedule,
@@ -124,7 +131,16 @@ export const previewRule = z
           message: 'is before the one above it',
         });
     }),
-  );
+  )
+  .superRefine(({ triggers, closings, count }, ctx) => {
+    const calendars = triggers.filter(({ on }) => on === 'calendar').length;
+    if (calendars * (closings.length + count) > MOST_CALENDAR_STEPS)
+      ctx.addIssue({
+        code: 'custom',
+        path: ['closings'],
+        message: `and further points are at most ${Math.floor(MOST_CALENDAR_STEPS / calendars)} in all with ${calendars} calendar triggers`,
+      });
+  });
 
 const states = z.object({ overdue: z.int(), due: z.int(), upcoming: z.int() });
 

@@ -152,6 +152,31 @@ describe('the state of a unit, by hand from the table of states', () => {
   });
 });
 
+const sundays = (rrule: string) => ({ on: 'calendar', rrule, start: '1990-01-01' });
+const early = Array.from({ length: 200 }, () => closed(100));
+
+// By a calendar: 29 February is a Sunday in 2004 and, with 2000 and 2100 out of the way, every 28 years after.
+test('a day that comes once in 28 years is found after 200 closings, each too early', async () => {
+  const { body } = await preview({
+    triggers: [
+      sundays('FREQ=DAILY;BYMONTH=2;BYMONTHDAY=29;BYDAY=SU;COUNT=9999'),
+      sundays('FREQ=WEEKLY;BYMONTH=2;BYDAY=SU;COUNT=9999'),
+    ],
+    closings: early,
+    count: 50,
+  });
+  const [leap, weekly] = body.triggers as { due: unknown; following: unknown[] }[];
+  expect([leap?.due, ...leap!.following.slice(0, 3)]).toEqual([
+    { date: '2004-02-29' },
+    { date: '2032-02-29' },
+    { date: '2060-02-29' },
+    { date: '2088-02-29' },
+  ]);
+  expect(leap?.following).toHaveLength(50);
+  // The first closing, years late, leaves the Sundays of Februaries up to its day behind; the others are early.
+  expect(weekly?.due).toEqual({ date: '2000-02-06' });
+});
+
 test.each([
   ['triggers.0.rrule', { triggers: [{ on: 'calendar', rrule: 'FREQ=SECONDLY', start: '2026-01-01' }] }],
   ['count', { count: 51 }],
@@ -164,6 +189,9 @@ test.each([
   ['closings.0.engineHours', { closings: [closed(30.25)] }],
   ['window.earlyHours', { window: { earlyHours: 30 } }],
   ['name', { name: 'Rebuild' }],
+  ['closings', { triggers: Array(3).fill(sundays('FREQ=YEARLY')), closings: early }],
+  ['closings', { closings: [...early, closed(100)] }],
+  ['triggers', { triggers: Array(9).fill({ on: 'outings', every: 40 }) }],
 ])('a preview that cannot be is refused at %s (case %#)', async (path, part) => {
   const { status, body } = await preview({ triggers: [{ on: 'engine_hours', every: 25 }], ...part });
   expect(status).toBe(422);

@@ -1,4 +1,6 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { addDays, WEEKDAYS } from '@/lib/domain/calendar-day';
 import {
   firstAfter,
   firstOnOrAfter,
@@ -100,5 +102,52 @@ describe('the first occurrence', () => {
 describe('a window that ends before it begins', () => {
   it('has no occurrence', () => {
     expect(occurrencesBetween(read('FREQ=DAILY'), '2026-01-01', '2026-02-01', '2026-01-31')).toEqual([]);
+  });
+});
+
+// Every day looked at, one by one, with the date library of the language as the judge of months and weekdays.
+describe('days and weeks of some months', () => {
+  const START = '2026-01-01';
+  const everyDay = Array.from({ length: 365 * 6 }, (_, index) => ({ index, day: addDays(START, index) }));
+  const weekdayOf = (day: string) => (new Date(`${day}T00:00:00Z`).getUTCDay() + 6) % 7;
+  const months = fc.uniqueArray(fc.integer({ min: 1, max: 12 }), { minLength: 1, maxLength: 3 });
+  const until = everyDay.at(-1)!.day;
+
+  it('are all found, whatever the INTERVAL', () => {
+    fc.assert(
+      fc.property(months, fc.integer({ min: 1, max: 80 }), (byMonth, interval) => {
+        const rule = read(`FREQ=DAILY;INTERVAL=${interval};BYMONTH=${byMonth.join()}`);
+        const days = everyDay.filter(
+          ({ index, day }) => index % interval === 0 && byMonth.includes(Number(day.slice(5, 7))),
+        );
+        expect(occurrencesBetween(rule, START, START, until)).toEqual(days.map(({ day }) => day));
+      }),
+    );
+  });
+
+  it('are all found in weeks that begin on any day', () => {
+    const weekday = fc.integer({ min: 0, max: 6 });
+    fc.assert(
+      fc.property(
+        months,
+        fc.integer({ min: 1, max: 60 }),
+        weekday,
+        fc.uniqueArray(weekday, { minLength: 1 }),
+        (byMonth, interval, weekStart, byDay) => {
+          const names = byDay.map((day) => WEEKDAYS[day]).join();
+          const rule = read(
+            `FREQ=WEEKLY;INTERVAL=${interval};BYMONTH=${byMonth.join()};BYDAY=${names};WKST=${WEEKDAYS[weekStart]}`,
+          );
+          const intoFirstWeek = (weekdayOf(START) - weekStart + 7) % 7;
+          const days = everyDay.filter(
+            ({ index, day }) =>
+              Math.floor((index + intoFirstWeek) / 7) % interval === 0 &&
+              byDay.includes(weekdayOf(day)) &&
+              byMonth.includes(Number(day.slice(5, 7))),
+          );
+          expect(occurrencesBetween(rule, START, START, until)).toEqual(days.map(({ day }) => day));
+        },
+      ),
+    );
   });
 });
