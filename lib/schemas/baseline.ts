@@ -4,7 +4,7 @@ import type { UnitDuePoints } from './due-point';
 
 /** "Last done at …": for a unit that comes with a past. `note` says who says so. */
 export const recordBaseline = z.strictObject({
-  ruleId: id.toLowerCase(),
+  ruleId: id,
   closedOn: day,
   engineHours: hours,
   outings: count.optional(),

@@ -46,6 +46,12 @@ export const text = (max: number) =>
 
 export const idParams = z.object({ id });
 
+/** A flag in a query: `open=true` or `open=false`. */
+export const flag = z
+  .enum(['true', 'false'], 'is true or false')
+  .transform((value) => value === 'true')
+  .optional();
+
 /** How a list is asked for in pages. */
 export const pageQuery = {
   cursor: z.string().max(500).optional(),

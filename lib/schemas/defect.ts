@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { id, line, text } from './common';
+import { flag, id, line, text } from './common';
 
 export const createDefect = z.strictObject({
   /** Made by the client, so that sending it again writes nothing; left out, one is made here. */
@@ -11,12 +11,6 @@ export const createDefect = z.strictObject({
 });
 
 export const clearDefect = z.strictObject({ note: line(1000) });
-
-/** A flag in a query: `open=true` or `open=false`. */
-export const flag = z
-  .enum(['true', 'false'], 'is true or false')
-  .transform((value) => value === 'true')
-  .optional();
 
 export const defectsQuery = z.object({ unitId: id.optional(), open: flag });
 

@@ -1,6 +1,5 @@
 import { z } from 'zod';
-import { day, id, line } from './common';
-import { flag } from './defect';
+import { day, flag, id, line } from './common';
 
 export const createLayUp = z
   .strictObject({ unitId: id, fromOn: day, untilOn: day.optional(), reason: line(300) })

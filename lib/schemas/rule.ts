@@ -14,7 +14,7 @@ const minutes = z
 const carbs = z.int('give a whole number').min(0, 'cannot be below 0').max(16, 'cannot be above 16');
 const ids = (noun: string) =>
   z
-    .array(id.toLowerCase())
+    .array(id)
     .min(1, `name at least one ${noun}, or leave it out for all`)
     .max(500, 'are at most 500');
 
