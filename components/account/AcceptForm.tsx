@@ -1,32 +1,33 @@
 'use client';
 
-import type { FormEvent } from 'react';
-import { Button } from '@/components/ui/Button';
-import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
-import { fieldError, formError, send } from '@/lib/client/api';
+import { fieldError, send } from '@/lib/client/api';
 import { rawOf, textOf } from '@/lib/client/form-values';
 import { goTo } from '@/lib/client/go-to';
 import { signIn } from '@/lib/client/sign-in';
 import { useSend } from '@/lib/client/use-send';
+import { AccountForm } from './AccountForm';
 import { NewPasswordInput } from './NewPasswordInput';
 
 /** Accepts an invitation: one's name as one writes it, and a password. Signs in right away. */
 export function AcceptForm({ token, name, email }: { token: string; name: string; email: string }) {
-  const { busy, failure, run } = useSend();
-  async function submit(event: FormEvent<HTMLFormElement>) {
-    event.preventDefault();
-    const form = event.currentTarget;
+  const sending = useSend();
+  const { failure, run } = sending;
+  async function submit(form: HTMLFormElement) {
     const password = rawOf(form, 'password');
     const body = { token, name: textOf(form, 'name'), password };
     const accepted = await run(() => send('POST', '/api/v1/invitations/acceptance', body));
     if (!accepted) return;
     goTo((await run(() => signIn(email, password))) ? '/' : '/sign-in');
   }
-  const error = formError(failure, ['name', 'password']);
   return (
-    <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-5">
-      {error ? <Notice tone="danger">{error}</Notice> : null}
+    <AccountForm
+      fields={['name', 'password']}
+      button="Accept and sign in"
+      sending={sending}
+      onSubmit={submit}
+      door
+    >
       <TextInput
         name="email"
         type="email"
@@ -45,9 +46,6 @@ export function AcceptForm({ token, name, email }: { token: string; name: string
         large
       />
       <NewPasswordInput error={fieldError(failure, 'password')} />
-      <Button type="submit" kind="primary" size="large" wide busy={busy}>
-        Accept and sign in
-      </Button>
-    </form>
+    </AccountForm>
   );
 }

@@ -1,20 +1,20 @@
 'use client';
 
-import { useState, type FormEvent } from 'react';
-import { Button } from '@/components/ui/Button';
+import { useState } from 'react';
 import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
-import { fieldError, formError, send } from '@/lib/client/api';
+import { fieldError, send } from '@/lib/client/api';
 import { textOf } from '@/lib/client/form-values';
 import { useSend } from '@/lib/client/use-send';
+import { AccountForm } from './AccountForm';
 
 /** Asks for a letter with a link. Says the same whether or not anybody has the address. */
 export function ForgotForm() {
-  const { busy, failure, run } = useSend();
+  const sending = useSend();
+  const { failure, run } = sending;
   const [askedFor, setAskedFor] = useState<string | null>(null);
-  async function submit(event: FormEvent<HTMLFormElement>) {
-    event.preventDefault();
-    const email = textOf(event.currentTarget, 'email');
+  async function submit(form: HTMLFormElement) {
+    const email = textOf(form, 'email');
     if (await run(() => send('POST', '/api/v1/password-resets', { email }))) setAskedFor(email);
   }
   if (askedFor) {
@@ -25,10 +25,8 @@ export function ForgotForm() {
       </Notice>
     );
   }
-  const error = formError(failure, ['email']);
   return (
-    <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-5">
-      {error ? <Notice tone="danger">{error}</Notice> : null}
+    <AccountForm fields={['email']} button="Send me a link" sending={sending} onSubmit={submit} door>
       <TextInput
         name="email"
         type="email"
@@ -37,9 +35,6 @@ export function ForgotForm() {
         error={fieldError(failure, 'email')}
         large
       />
-      <Button type="submit" kind="primary" size="large" wide busy={busy}>
-        Send me a link
-      </Button>
-    </form>
+    </AccountForm>
   );
 }

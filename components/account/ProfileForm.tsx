@@ -1,36 +1,31 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import type { FormEvent } from 'react';
-import { Button } from '@/components/ui/Button';
 import { Checkbox } from '@/components/ui/Checkbox';
-import { Notice } from '@/components/ui/Notice';
 import { TextInput } from '@/components/ui/TextInput';
 import { useToast } from '@/components/ui/Toast';
-import { fieldError, formError, send } from '@/lib/client/api';
+import { fieldError, send } from '@/lib/client/api';
 import { textOf } from '@/lib/client/form-values';
 import { useSend } from '@/lib/client/use-send';
 import type { Account } from '@/lib/schemas/account';
+import { AccountForm } from './AccountForm';
 
 /** One's own name and, for a manager, whether the digest comes by e-mail. */
 export function ProfileForm({ account }: { account: Account }) {
   const router = useRouter();
   const toast = useToast();
-  const { busy, failure, run } = useSend();
+  const sending = useSend();
+  const { failure, run } = sending;
   const isManager = account.role === 'manager';
-  async function submit(event: FormEvent<HTMLFormElement>) {
-    event.preventDefault();
-    const form = event.currentTarget;
+  async function submit(form: HTMLFormElement) {
     const digestWanted = textOf(form, 'digestWanted') === 'on';
     const body = { name: textOf(form, 'name'), ...(isManager && { digestWanted }) };
     if (!(await run(() => send('PATCH', '/api/v1/account', body)))) return;
     toast({ text: 'Saved.' });
     router.refresh();
   }
-  const error = formError(failure, ['name', 'digestWanted']);
   return (
-    <form onSubmit={(event) => void submit(event)} noValidate className="grid max-w-xl gap-5">
-      {error ? <Notice tone="danger">{error}</Notice> : null}
+    <AccountForm fields={['name', 'digestWanted']} button="Save" sending={sending} onSubmit={submit}>
       <TextInput
         name="name"
         label="Name"
@@ -47,11 +42,6 @@ export function ProfileForm({ account }: { account: Account }) {
           error={fieldError(failure, 'digestWanted')}
         />
       ) : null}
-      <div>
-        <Button type="submit" kind="primary" busy={busy}>
-          Save
-        </Button>
-      </div>
-    </form>
+    </AccountForm>
   );
 }

@@ -13,10 +13,7 @@ const minutes = z
   .max(100_000, 'cannot be above 100,000 minutes');
 const carbs = z.int('give a whole number').min(0, 'cannot be below 0').max(16, 'cannot be above 16');
 const ids = (noun: string) =>
-  z
-    .array(id)
-    .min(1, `name at least one ${noun}, or leave it out for all`)
-    .max(500, 'are at most 500');
+  z.array(id).min(1, `name at least one ${noun}, or leave it out for all`).max(500, 'are at most 500');
 
 const NO_LEAD = { hours: 0, outings: 0, days: 0 };
 const NO_WINDOW = {
