@@ -1,4 +1,5 @@
 import { NumberInput } from '@/components/ui/NumberInput';
+import { namedOptions } from '@/components/ui/options';
 import { Select } from '@/components/ui/Select';
 import { TextInput } from '@/components/ui/TextInput';
 import { fieldError, type Failure } from '@/lib/client/api';
@@ -26,10 +27,7 @@ export function AvailabilityFilters({
         name="dockId"
         label="Dock"
         large
-        options={[
-          { value: '', label: 'All docks' },
-          ...docks.map(({ id, name }) => ({ value: id, label: name })),
-        ]}
+        options={[{ value: '', label: 'All docks' }, ...namedOptions(docks)]}
         value={asked.dockId ?? ''}
         onChange={(event) => onChange({ ...asked, dockId: event.target.value || undefined })}
       />

@@ -1,10 +1,8 @@
 import { NumberInput } from '@/components/ui/NumberInput';
+import { wordOptions } from '@/components/ui/options';
 import { RadioGroup } from '@/components/ui/RadioGroup';
 import type { Model } from '@/lib/schemas/model';
 import { PROPULSION_WORDS, STROKE_WORDS } from './model-words';
-
-const optionsOf = (words: Record<string, string>) =>
-  Object.entries(words).map(([value, label]) => ({ value, label }));
 
 /** What drives a model. An electric motor has neither stroke nor carburettors, so they are not asked for. */
 export function EngineFields({
@@ -28,7 +26,7 @@ export function EngineFields({
         id="propulsion"
         label="Propulsion"
         look="segmented"
-        options={optionsOf(PROPULSION_WORDS)}
+        options={wordOptions(PROPULSION_WORDS)}
         value={propulsion}
         disabled={disabled}
         error={error('propulsion')}
@@ -40,7 +38,7 @@ export function EngineFields({
           id="stroke"
           label="Stroke"
           look="segmented"
-          options={optionsOf(STROKE_WORDS)}
+          options={wordOptions(STROKE_WORDS)}
           defaultValue={model?.stroke ?? undefined}
           disabled={disabled}
           error={error('stroke')}

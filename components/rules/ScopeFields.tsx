@@ -1,22 +1,13 @@
+import { PROPULSION_WORDS, STROKE_WORDS } from '@/components/models/model-words';
 import { CheckList } from '@/components/ui/CheckList';
 import { NumberInput } from '@/components/ui/NumberInput';
+import { namedOptions, wordOptions } from '@/components/ui/options';
 import { Select } from '@/components/ui/Select';
 import type { FormState } from './form-state';
 
 export type Choice = { id: string; name: string };
 
-const PROPULSIONS = [
-  { value: '', label: 'Any' },
-  { value: 'jet', label: 'Jet' },
-  { value: 'outboard', label: 'Outboard' },
-  { value: 'inboard', label: 'Inboard' },
-  { value: 'electric', label: 'Electric' },
-];
-const STROKES = [
-  { value: '', label: 'Any' },
-  { value: 'two', label: 'Two-stroke' },
-  { value: 'four', label: 'Four-stroke' },
-];
+const ANY = { value: '', label: 'Any' };
 
 /** Which units the rule is for, with how many that makes. */
 export function ScopeFields({
@@ -43,7 +34,7 @@ export function ScopeFields({
           id="appliesTo.modelIds"
           label="Models"
           hint="None chosen means any"
-          options={models.map(({ id, name }) => ({ value: id, label: name }))}
+          options={namedOptions(models)}
           value={draft.modelIds}
           disabled={readOnly}
           error={errorOf('appliesTo.modelIds')}
@@ -53,7 +44,7 @@ export function ScopeFields({
           id="appliesTo.dockIds"
           label="Docks"
           hint="None chosen means any"
-          options={docks.map(({ id, name }) => ({ value: id, label: name }))}
+          options={namedOptions(docks)}
           value={draft.dockIds}
           disabled={readOnly}
           error={errorOf('appliesTo.dockIds')}
@@ -62,7 +53,7 @@ export function ScopeFields({
         <Select
           label="Propulsion"
           id="appliesTo.propulsion"
-          options={PROPULSIONS}
+          options={[ANY, ...wordOptions(PROPULSION_WORDS)]}
           value={draft.propulsion}
           disabled={readOnly}
           onChange={(event) => change('appliesTo.propulsion', { propulsion: event.target.value })}
@@ -70,7 +61,7 @@ export function ScopeFields({
         <Select
           label="Stroke"
           id="appliesTo.stroke"
-          options={STROKES}
+          options={[ANY, ...wordOptions(STROKE_WORDS)]}
           value={draft.stroke}
           disabled={readOnly}
           onChange={(event) => change('appliesTo.stroke', { stroke: event.target.value })}

@@ -1,5 +1,6 @@
 import { Button } from '@/components/ui/Button';
 import { LinkButton } from '@/components/ui/LinkButton';
+import { namedOptions } from '@/components/ui/options';
 import { Select } from '@/components/ui/Select';
 
 const STATES = [
@@ -11,8 +12,6 @@ const STATES = [
 
 type Named = { id: string; name: string };
 export type Filter = { dock?: string | undefined; model?: string | undefined; state?: string | undefined };
-
-const options = (all: Named[]) => all.map(({ id, name }) => ({ value: id, label: name }));
 
 /** Narrows the list of units; a plain form, so that the address says what is shown. */
 export function FleetFilters({ docks, models, filter }: { docks: Named[]; models: Named[]; filter: Filter }) {
@@ -26,14 +25,14 @@ export function FleetFilters({ docks, models, filter }: { docks: Named[]; models
         label="Dock"
         name="dock"
         placeholder="Every dock"
-        options={options(docks)}
+        options={namedOptions(docks)}
         defaultValue={filter.dock ?? ''}
       />
       <Select
         label="Model"
         name="model"
         placeholder="Every model"
-        options={options(models)}
+        options={namedOptions(models)}
         defaultValue={filter.model ?? ''}
       />
       <Select

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { Section } from '@/components/rules/Section';
 import { NumberInput } from '@/components/ui/NumberInput';
+import { namedOptions } from '@/components/ui/options';
 import { Select } from '@/components/ui/Select';
 import { TextInput } from '@/components/ui/TextInput';
 import type { UnitFormData } from '@/lib/schemas/fleet';
@@ -42,7 +43,7 @@ export function UnitFields({ data, error }: Props) {
             name="modelId"
             label="Model"
             placeholder="Choose a model"
-            options={models.map(({ id, name }) => ({ value: id, label: name }))}
+            options={namedOptions(models)}
             value={modelId}
             onChange={(event) => setModelId(event.target.value)}
             error={error('modelId')}
@@ -51,7 +52,7 @@ export function UnitFields({ data, error }: Props) {
             name="dockId"
             label="Dock"
             placeholder="Choose a dock"
-            options={docks.map(({ id, name }) => ({ value: id, label: name }))}
+            options={namedOptions(docks)}
             value={dockId}
             onChange={(event) => setDockId(event.target.value)}
             error={error('dockId')}

@@ -5,6 +5,7 @@ import { TaskTable } from '@/components/task/TaskTable';
 import { kindWords } from '@/components/task/task-words';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { LinkButton } from '@/components/ui/LinkButton';
+import { namedOptions } from '@/components/ui/options';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { listDocks } from '@/lib/actions/list-docks';
 import { listTasks } from '@/lib/actions/list-tasks';
@@ -29,7 +30,7 @@ export default async function TasksPage({ searchParams }: { searchParams: Promis
       name: 'dock',
       label: 'Dock',
       all: 'All docks',
-      options: docks.map(({ id, name }) => ({ value: id, label: name })),
+      options: namedOptions(docks),
     },
     {
       name: 'kind',
