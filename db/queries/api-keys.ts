@@ -41,6 +41,7 @@ export function listApiKeys(db: Kysely<DB>, personId: string): Promise<ApiKeyRow
     .execute();
 }
 
+/** Stores a key of a person; of the key itself its hash and the first letters alone. */
 export function insertApiKey(
   db: Kysely<DB>,
   row: { personId: string; name: string; prefix: string; keyHash: Buffer; now: Date },

@@ -27,10 +27,12 @@ export function listBaselines(db: Kysely<DB>, unitId: string) {
     .execute();
 }
 
+/** The baseline of this id, withdrawn or not, with its rule and whom it names. */
 export function findBaseline(db: Kysely<DB>, id: string): Promise<BaselineRow | undefined> {
   return selectBaselines(db).where('baseline.id', '=', id).executeTakeFirst();
 }
 
+/** Stores that a rule was last done on a unit; answers its id. */
 export function insertBaseline(db: Kysely<DB>, row: Insertable<BaselineTable>): Promise<{ id: string }> {
   return db.insertInto('baseline').values(row).returning('id').executeTakeFirstOrThrow();
 }

@@ -15,10 +15,12 @@ function selectClosures(db: Kysely<DB>) {
     .select(['unit.dock_id', 'closer.name as closer_name', 'reverser.name as reverser_name']);
 }
 
+/** The closure of this id, reversed or not. */
 export function findClosure(db: Kysely<DB>, id: string) {
   return selectClosures(db).where('closure.id', '=', id).executeTakeFirst();
 }
 
+/** The closure of this id, reversed or not. Throws when there is none. */
 export function getClosure(db: Kysely<DB>, id: string) {
   return selectClosures(db).where('closure.id', '=', id).executeTakeFirstOrThrow();
 }
@@ -38,6 +40,9 @@ export function listClosures(db: Kysely<DB>, task: { id: string; unit_id: string
     .execute();
 }
 
+/**
+ * Stores that a task was done; answers its id. The index `closure_task` keeps one that is not reversed a task.
+ */
 export function insertClosure(trx: Transaction<DB>, row: Insertable<ClosureTable>): Promise<{ id: string }> {
   return trx.insertInto('closure').values(row).returning('id').executeTakeFirstOrThrow();
 }
@@ -47,6 +52,7 @@ export function lockClosure(trx: Transaction<DB>, id: string) {
   return trx.selectFrom('closure').selectAll().where('id', '=', id).forUpdate().executeTakeFirstOrThrow();
 }
 
+/** Marks a closure reversed, with why. Lock it first: this does not look whether it is already. */
 export async function reverseClosureRow(
   trx: Transaction<DB>,
   id: string,

@@ -19,6 +19,7 @@ function selectDefects(db: Kysely<DB>) {
     ]);
 }
 
+/** The defect of this id, cleared or not. */
 export function findDefect(db: Kysely<DB>, id: string) {
   return selectDefects(db).where('defect.id', '=', id).executeTakeFirst();
 }
@@ -36,6 +37,7 @@ export function listDefects(
   return query.execute();
 }
 
+/** Stores a reported defect; answers its id. */
 export function insertDefect(db: Kysely<DB>, row: Insertable<DefectTable>) {
   return db.insertInto('defect').values(row).returning('id').executeTakeFirstOrThrow();
 }

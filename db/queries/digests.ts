@@ -15,6 +15,7 @@ export function listDigestReaders(db: Kysely<DB>): Promise<DigestReader[]> {
   return readers(db).where('digest_wanted', '=', true).where('role', '=', 'manager').orderBy('id').execute();
 }
 
+/** The person as a reader of the digest, of whatever role; nobody who is deactivated. */
 export function findDigestReader(db: Kysely<DB>, personId: string): Promise<DigestReader | undefined> {
   return readers(db).where('id', '=', personId).executeTakeFirst();
 }

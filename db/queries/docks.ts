@@ -9,10 +9,12 @@ export function listDocks(db: Kysely<DB>, ids: 'all' | readonly string[]): Promi
   return (ids === 'all' ? query : query.where('id', 'in', [...ids])).execute();
 }
 
+/** The dock of this id. */
 export function findDock(db: Kysely<DB>, id: string): Promise<DockRow | undefined> {
   return db.selectFrom('dock').selectAll().where('id', '=', id).executeTakeFirst();
 }
 
+/** Stores a dock and answers it. The index `dock_name` keeps names apart, in any case. */
 export function insertDock(db: Kysely<DB>, row: Insertable<DockTable>): Promise<DockRow> {
   return db.insertInto('dock').values(row).returningAll().executeTakeFirstOrThrow();
 }

@@ -14,6 +14,7 @@ function selectLayUps(db: Kysely<DB>) {
     .select(['unit.fleet_number', 'unit.dock_id', 'recorder.name as recorder_name']);
 }
 
+/** The lay-up of this id, ended or not. */
 export function findLayUp(db: Kysely<DB>, id: string) {
   return selectLayUps(db).where('lay_up.id', '=', id).executeTakeFirst();
 }
@@ -31,6 +32,7 @@ export function listLayUps(
   return query.execute();
 }
 
+/** Stores a lay-up; answers its id. The index `lay_up_open` keeps one open a unit. */
 export function insertLayUp(db: Kysely<DB>, row: Insertable<LayUpTable>) {
   return db.insertInto('lay_up').values(row).returning('id').executeTakeFirstOrThrow();
 }

@@ -53,6 +53,7 @@ export async function releaseMailClaim(db: Kysely<DB>, mailId: string, claimId: 
     .execute();
 }
 
+/** The letter of this id, sent or not. */
 export function findMail(db: Kysely<DB>, mailId: string): Promise<MailRow | undefined> {
   return db.selectFrom('mail').selectAll().where('id', '=', mailId).executeTakeFirst();
 }

@@ -3,14 +3,17 @@ import type { DB, ModelTable } from '../tables';
 
 export type ModelRow = Selectable<ModelTable>;
 
+/** All models, by name. */
 export function listModels(db: Kysely<DB>): Promise<ModelRow[]> {
   return db.selectFrom('model').selectAll().orderBy('name').execute();
 }
 
+/** The model of this id. */
 export function findModel(db: Kysely<DB>, id: string): Promise<ModelRow | undefined> {
   return db.selectFrom('model').selectAll().where('id', '=', id).executeTakeFirst();
 }
 
+/** Stores a model and answers it. The index `model_name` keeps names apart, in any case. */
 export function insertModel(db: Kysely<DB>, row: Insertable<ModelTable>): Promise<ModelRow> {
   return db.insertInto('model').values(row).returningAll().executeTakeFirstOrThrow();
 }

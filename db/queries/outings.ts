@@ -3,10 +3,12 @@ import type { DB, OutingTable } from '../tables';
 
 export type OutingRow = Selectable<OutingTable>;
 
+/** The outing of this id, void or not. */
 export function findOuting(db: Kysely<DB>, id: string): Promise<OutingRow | undefined> {
   return db.selectFrom('outing').selectAll().where('id', '=', id).executeTakeFirst();
 }
 
+/** The outing that the unit is on now. */
 export function findOpenOuting(db: Kysely<DB>, unitId: string): Promise<OutingRow | undefined> {
   return db
     .selectFrom('outing')
@@ -28,6 +30,7 @@ export async function findLastReturn(db: Kysely<DB>, unitId: string): Promise<Da
   return row?.at ?? null;
 }
 
+/** Stores an outing and answers it. The caller makes its id. */
 export function insertOuting(trx: Transaction<DB>, row: Insertable<OutingTable>): Promise<OutingRow> {
   return trx.insertInto('outing').values(row).returningAll().executeTakeFirstOrThrow();
 }

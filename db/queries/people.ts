@@ -42,6 +42,7 @@ export function listPeople(db: Kysely<DB>): Promise<PersonRow[]> {
     .execute();
 }
 
+/** The person of this id, deactivated or not. */
 export function findPerson(db: Kysely<DB>, id: string): Promise<PersonRow | undefined> {
   return db.selectFrom('person').select(PERSON).where('id', '=', id).executeTakeFirst();
 }
@@ -53,10 +54,12 @@ export function findCredentialByEmail(db: Kysely<DB>, email: string): Promise<Cr
     .executeTakeFirst();
 }
 
+/** What a password of this person is compared with. */
 export function findCredential(db: Kysely<DB>, id: string): Promise<CredentialRow | undefined> {
   return credentials(db).where('id', '=', id).executeTakeFirst();
 }
 
+/** Stores a person. The index `person_email` keeps addresses apart, in any case. */
 export function insertPerson(db: Kysely<DB>, row: Insertable<PersonTable>): Promise<PersonRow> {
   return db.insertInto('person').values(row).returning(PERSON).executeTakeFirstOrThrow();
 }

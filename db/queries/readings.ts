@@ -21,10 +21,12 @@ function selectReadings(db: Kysely<DB>) {
     ]);
 }
 
+/** The reading of this id, void or not. */
 export function findReading(db: Kysely<DB>, id: string) {
   return selectReadings(db).where('reading.id', '=', id).executeTakeFirst();
 }
 
+/** Stores a reading; answers its id. It does not move the live meter. */
 export function insertReading(db: Kysely<DB>, row: Insertable<ReadingTable>) {
   return db.insertInto('reading').values(row).returning('id').executeTakeFirstOrThrow();
 }

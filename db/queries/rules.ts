@@ -35,6 +35,7 @@ export function listNamedRules(db: Kysely<DB>, { ended }: { ended: boolean }): P
   return (ended ? query : query.where('rule.ended_at', 'is', null)).execute();
 }
 
+/** The rule of this id, ended or in force. */
 export function findRule(db: Kysely<DB>, id: string): Promise<NamedRuleRow | undefined> {
   return selectNamedRules(db).where('rule.id', '=', id).executeTakeFirst();
 }
@@ -56,6 +57,7 @@ export async function hasDuties(db: Kysely<DB>, id: string, duties: Duties): Pro
   return rows.length > 0;
 }
 
+/** Stores a rule in force; answers its id. The index `rule_name` keeps names of those apart, in any case. */
 export function insertRule(db: Kysely<DB>, row: Insertable<RuleTable>): Promise<{ id: string }> {
   return db.insertInto('rule').values(row).returning('id').executeTakeFirstOrThrow();
 }

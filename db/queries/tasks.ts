@@ -60,10 +60,12 @@ function selectTaskStandings(db: Kysely<DB>) {
     ]);
 }
 
+/** The task of this id, open or ended. */
 export function findTask(db: Kysely<DB>, id: string) {
   return selectTasks(db).where('task.id', '=', id).executeTakeFirst();
 }
 
+/** The task of this id with all that a list shows of it. Throws when there is none. */
 export function getTaskStanding(db: Kysely<DB>, id: string) {
   return selectTaskStandings(db).where('task.id', '=', id).executeTakeFirstOrThrow();
 }
@@ -144,6 +146,7 @@ export function lockOtherOpenTask(
     .executeTakeFirst();
 }
 
+/** Stores an open task; answers its id. Indexes keep one open task a rule on a unit, and one a defect. */
 export function insertTask(db: Kysely<DB>, row: Insertable<TaskTable>): Promise<{ id: string }> {
   return db.insertInto('task').values(row).returning('id').executeTakeFirstOrThrow();
 }
@@ -176,6 +179,7 @@ export function listTaskNotes(db: Kysely<DB>, taskId: string) {
     .execute();
 }
 
+/** Stores a note on a task; answers its id. */
 export function insertTaskNote(
   db: Kysely<DB>,
   row: { task_id: string; text: string; written_at: Date; written_by: string | null },

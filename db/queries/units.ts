@@ -37,10 +37,12 @@ function selectUnits(db: Kysely<DB>) {
     ]);
 }
 
+/** The unit of this id, retired or not. */
 export function findUnit(db: Kysely<DB>, id: string) {
   return selectUnits(db).where('unit.id', '=', id).executeTakeFirst();
 }
 
+/** The unit of this id, retired or not. Throws when there is none. */
 export function getUnit(db: Kysely<DB>, id: string) {
   return selectUnits(db).where('unit.id', '=', id).executeTakeFirstOrThrow();
 }
@@ -68,6 +70,10 @@ export function listRetiredUnits(db: Kysely<DB>, dockIds: 'all' | readonly strin
   return (dockIds === 'all' ? query : query.where('unit.dock_id', 'in', [...dockIds])).execute();
 }
 
+/**
+ * Stores a unit, without its meter; answers its id. The index `unit_fleet_number` keeps fleet numbers apart, in any
+ * case, and `unit_hin` the hull numbers of units that are not retired.
+ */
 export function insertUnit(db: Kysely<DB>, row: Insertable<UnitTable>) {
   return db.insertInto('unit').values(row).returning('id').executeTakeFirstOrThrow();
 }
@@ -109,10 +115,12 @@ export async function countWrites(trx: Transaction<DB>, ids: readonly string[]):
     .execute();
 }
 
+/** Stores where the meters of a new unit stand. */
 export function insertLiveMeter(trx: Transaction<DB>, row: Insertable<LiveMeterTable>) {
   return trx.insertInto('live_meter').values(row).execute();
 }
 
+/** Changes what is named of a unit. Lock it first. */
 export function updateUnit(trx: Transaction<DB>, id: string, row: Updateable<UnitTable>) {
   return trx.updateTable('unit').set(row).where('id', '=', id).execute();
 }

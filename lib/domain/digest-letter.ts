@@ -97,4 +97,5 @@ export function digestText(digest: Digest, links: DigestLinks): string {
   return `${out.join('\n')}\n`;
 }
 
+/** The text with its first letter as a capital. */
 export const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
