@@ -43,7 +43,8 @@ export interface DatabaseOptions {
 
 /**
  * A pool of connections. Every wait has a limit: 5 s to connect, 15 s for a statement, 5 s for a lock, 30 s idle
- * inside a transaction. A lost connection fails its own query, not the process. `end()` it.
+ * inside a transaction. A lost connection fails its own query, not the process, and is told of unless
+ * the pool is being ended. `end()` it.
  */
 export function createPool(options: DatabaseOptions, config: pg.PoolConfig = {}): pg.Pool {
   const pool = new pg.Pool({
@@ -57,7 +58,9 @@ export function createPool(options: DatabaseOptions, config: pg.PoolConfig = {})
     options: '-c timezone=UTC',
     ...config,
   });
-  const report = (error: Error) => console.warn(`database connection lost: ${error.message}`);
+  const report = (error: Error) => {
+    if (!pool.ending) console.warn(`database connection lost: ${error.message}`);
+  };
   pool.on('error', report);
   // A client that is checked out reports to nobody else, and an 'error' nobody hears ends the process.
   pool.on('connect', (client) => client.on('error', report));

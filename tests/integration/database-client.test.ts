@@ -1,5 +1,6 @@
 import { sql } from 'kysely';
-import { expect, test } from 'vitest';
+import { expect, test, vi } from 'vitest';
+import { createPool } from '@/db/client';
 import { migrationsCurrent } from '@/db/migrate';
 import { runTransaction } from '@/db/transaction';
 import { testDatabase } from '../support/database';
@@ -46,6 +47,21 @@ test('a lost connection fails its own query, and the database is there again', a
   const one = () =>
     sql<{ one: number }>`select 1 as one`.execute(database.db).then(({ rows }) => rows[0]?.one);
   await expect.poll(() => one().catch(() => 'lost')).toBe(1);
+});
+
+test('a connection that is lost while the pool is being ended is told of to nobody', async () => {
+  const warned = vi.spyOn(console, 'warn');
+  const pool = createPool({ url: database.url });
+  const client = await pool.connect();
+  const { rows } = await client.query<{ pid: number }>('select pg_backend_pid() as pid');
+  const lost = new Promise<void>((resolve) => client.once('end', resolve));
+  const ended = pool.end();
+  await sql`select pg_terminate_backend(${rows[0]?.pid})`.execute(database.db);
+  await lost;
+  client.release();
+  await ended;
+  expect(warned).not.toHaveBeenCalled();
+  warned.mockRestore();
 });
 
 test('two transactions that lock each other out both end, one of them at its second try', async () => {
