@@ -1,10 +1,18 @@
-import { execFileSync } from 'node:child_process';
+import { execFileSync, spawnSync } from 'node:child_process';
 import { existsSync, mkdirSync, mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { gunzipSync } from 'node:zlib';
 
 const PACKAGE = 'gretl-data';
 const INSIDE = 'usr/share/gretl/data/misc/bikesharing.gdt';
+
+/** A bare machine has no lists of packages yet, and fetching them takes root or sudo, as the launcher does it. */
+function ensureKnown(): void {
+  if (spawnSync('apt-cache', ['show', PACKAGE]).status === 0) return;
+  const asRoot = process.getuid?.() === 0 ? [] : ['sudo'];
+  const [command = '', ...args] = [...asRoot, 'apt-get', 'update', '-qq'];
+  execFileSync(command, args, { stdio: ['ignore', 'pipe', 'pipe'] });
+}
 
 /** Fetches Debian's package without installing it, and takes the one file out. Kept for the next run. */
 function fetchFile(): string {
@@ -14,6 +22,7 @@ function fetchFile(): string {
   mkdirSync(home, { recursive: true });
   const work = mkdtempSync(path.join(home, 'fetch-'));
   try {
+    ensureKnown();
     execFileSync('apt-get', ['download', '-q', PACKAGE], { cwd: work, stdio: ['ignore', 'pipe', 'pipe'] });
     execFileSync('sh', ['-c', `dpkg-deb -x ${PACKAGE}_*.deb unpacked`], { cwd: work });
     renameSync(path.join(work, 'unpacked', INSIDE), kept);
