@@ -1,6 +1,7 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePointColumns } from '@/lib/domain/duty-standing';
+import type { Step } from '@/lib/domain/procedure';
 import type { Lead, Labour, PartNeed, Scope, Trigger, Window } from '@/lib/domain/rule';
 
 /** An instant: read as a Date, written as a Date. */
@@ -205,6 +206,25 @@ export interface RuleTable {
   end_reason: string | null;
 }
 
+export interface ProcedureTable {
+  id: Generated<string>;
+  kind: 'inspection' | 'service' | 'rebuild' | 'repair';
+  name: string;
+  retired_at: MaybeInstant;
+  retired_by: string | null;
+  created_at: DefaultInstant;
+}
+
+export interface ProcedureVersionTable {
+  id: Generated<string>;
+  procedure_id: string;
+  version: number;
+  steps: Json<Step[]>;
+  note: string | null;
+  written_at: DefaultInstant;
+  written_by: string | null;
+}
+
 export interface AssessmentTable {
   unit_id: string;
   wanted_revision: Generated<number>;
@@ -255,6 +275,7 @@ export interface TaskTable {
   origin: 'rule' | 'defect' | 'person';
   rule_id: string | null;
   defect_id: string | null;
+  procedure_version_id: string | null;
   planned_on: CalendarDay | null;
   planned_at: MaybeInstant;
   planned_by: string | null;
@@ -371,6 +392,8 @@ export interface DB {
   reading: ReadingTable;
   live_meter: LiveMeterTable;
   rule: RuleTable;
+  procedure: ProcedureTable;
+  procedure_version: ProcedureVersionTable;
   assessment: AssessmentTable;
   due_point: DuePointTable;
   defect: DefectTable;

@@ -15,6 +15,8 @@ export type WorkToOpen = {
   defect_id: string | null;
   /** What the work takes; null for a defect. */
   labour: Labour | null;
+  /** The version of the rule's procedure that stands now. */
+  procedure_version_id: string | null;
   carb_count: number;
   engines: number;
 };
@@ -60,6 +62,8 @@ export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): 
          and not exists (select 1 from task_note n where n.task_id = t.id)
          and not exists (select 1 from within_lead w where w.unit_id = t.unit_id and w.rule_id = t.rule_id))
     select w.unit_id, r.kind, r.name as title, null as detail, w.rule_id, null::uuid as defect_id, r.labour,
+           (select v.id from procedure_version v join procedure c on c.id = v.procedure_id and c.retired_at is null
+             where v.procedure_id = r.procedure_id order by v.version desc limit 1) as procedure_version_id,
            f.carb_count, f.engines
       from within_lead w
       join fleet f on f.id = w.unit_id
@@ -67,7 +71,7 @@ export async function settleTasks(db: Kysely<DB>, unitIds: UnitIds, now: Date): 
      where not exists (select 1 from task t
          where t.unit_id = w.unit_id and t.rule_id = w.rule_id and t.ended_at is null)
     union all
-    select d.unit_id, 'repair', d.title, d.detail, null, d.id, null, 0, 0
+    select d.unit_id, 'repair', d.title, d.detail, null, d.id, null, null, 0, 0
       from defect d
       join fleet f on f.id = d.unit_id
      where d.cleared_at is null and not exists (select 1 from task t where t.defect_id = d.id) /* prepared */`.execute(

@@ -3,6 +3,7 @@ import { findClosure, type ClosureRow } from '@/db/queries/closures';
 import { findDefect, type DefectRow } from '@/db/queries/defects';
 import { findLayUp, type LayUpRow } from '@/db/queries/lay-ups';
 import { findMeterFacts, type MeterFactsAsked } from '@/db/queries/meter-facts';
+import { findProcedure, type ProcedureRow } from '@/db/queries/procedures';
 import { findReading, type ReadingRow } from '@/db/queries/readings';
 import { findUnit, type UnitRow } from '@/db/queries/units';
 import { findTask, type TaskRow } from '@/db/queries/tasks';
@@ -76,6 +77,19 @@ export async function accessRule(
   const row = await findRule(ctx.db, ruleId);
   if (!row) throw refuseField(path, 'is no rule of this fleet', 'not_found');
   return row as Checked<NamedRuleRow>;
+}
+
+/** The procedure with its latest version, retired or in use. Throws `forbidden`, or `not_found` on `path`. */
+export async function accessProcedure(
+  ctx: Context,
+  procedureId: string,
+  act: FleetAct,
+  path = 'id',
+): Promise<Checked<ProcedureRow>> {
+  requireFleetWide(ctx, act);
+  const row = await findProcedure(ctx.db, procedureId);
+  if (!row) throw refuseField(path, 'is no procedure of this fleet', 'not_found');
+  return row as Checked<ProcedureRow>;
 }
 
 /** The model. Throws `forbidden`, or `not_found` on `path`. */

@@ -1,5 +1,6 @@
 import { listDocks } from '@/db/queries/docks';
 import { listModels } from '@/db/queries/models';
+import { findProcedure } from '@/db/queries/procedures';
 import type { Context } from '@/lib/context';
 import { Refusal, type FieldError } from '@/lib/errors';
 import type { CreateRule } from '@/lib/schemas/rule';
@@ -16,7 +17,7 @@ export async function checkRule({ db }: Context, input: CreateRule): Promise<voi
       path: `parts.${index}.partId`,
       message: 'is no part of this stock',
     })),
-    ...(input.procedureId ? [{ path: 'procedureId', message: 'is no procedure of this fleet' }] : []),
+    ...(await findProcedureFault(db, input.procedureId)),
   ];
   if (errors.length === 0) return;
   throw new Refusal(
@@ -24,6 +25,14 @@ export async function checkRule({ db }: Context, input: CreateRule): Promise<voi
     errors.map(({ path, message }) => `${path}: ${message}`).join('; '),
     errors,
   );
+}
+
+async function findProcedureFault(db: Context['db'], id: string | null | undefined): Promise<FieldError[]> {
+  if (!id) return [];
+  const procedure = await findProcedure(db, id);
+  if (procedure && procedure.retired_at === null) return [];
+  const message = procedure ? 'is a procedure that is retired' : 'is no procedure of this fleet';
+  return [{ path: 'procedureId', message }];
 }
 
 function findUnknown(

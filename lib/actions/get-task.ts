@@ -1,5 +1,6 @@
 import { findHeldSince, listClosures } from '@/db/queries/closures';
 import { toHours } from '@/lib/schemas/schedule-shape';
+import { findTaskProcedure } from '@/db/queries/procedures';
 import { findRule } from '@/db/queries/rules';
 import { getTaskStanding, listTaskNotes } from '@/db/queries/tasks';
 import type { Context } from '@/lib/context';
@@ -14,11 +15,12 @@ export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
   await accessTask(ctx, id, 'task.read');
   const row = await getTaskStanding(ctx.db, id);
   const task = toTask(row, ctx.now);
-  const [notes, closures, heldSince, rule] = await Promise.all([
+  const [notes, closures, heldSince, rule, procedure] = await Promise.all([
     listTaskNotes(ctx.db, id),
     listClosures(ctx.db, row),
     task.holdsUnit ? findHeldSince(ctx.db, row, ctx.now) : null,
     row.rule_id ? findRule(ctx.db, row.rule_id) : undefined,
+    findTaskProcedure(ctx.db, id),
   ]);
   return {
     ...task,
@@ -28,6 +30,7 @@ export async function getTask(ctx: Context, id: string): Promise<TaskPage> {
     readAt: row.meter_read_at.toISOString(),
     ruleWords: rule ? describeRule({ ...rule, window: rule.tolerance }, { holdsUnit: rule.holds_unit }) : [],
     heldSince: heldSince?.toISOString() ?? null,
+    procedure: procedure ?? null,
     notes: notes.map(toTaskNote),
     closures: closures.map(toClosure),
   };

@@ -1,4 +1,5 @@
 import { insertDefect } from '@/db/queries/defects';
+import { findCurrentVersionId } from '@/db/queries/procedures';
 import { findRule } from '@/db/queries/rules';
 import { insertTask } from '@/db/queries/tasks';
 import { lockUnits, type UnitRow } from '@/db/queries/units';
@@ -18,7 +19,7 @@ import { toScopedUnit } from './shape-unit';
  * Opens a task that a person asks for; or, with `ruleId`, the task of a rule before its lead, so that it can be
  * planned. A repair that holds the unit makes a holding defect with it, in the same transaction.
  * Throws `not_found` on `unitId` or `ruleId`, `conflict` on `unitId` for a retired unit and on `ruleId` when that
- * rule has an open task on the unit, `invalid_input` on `ruleId` for a rule that does not apply to the unit.
+ * rule has an open task on the unit, `invalid_input` on `procedureId` for one that is not in use and on `ruleId` for a rule that does not apply to the unit.
  */
 export async function openTask(ctx: Context, input: OpenTask): Promise<TaskPage> {
   const unit = await accessUnit(ctx, input.unitId, 'task.write', 'unitId');
@@ -31,8 +32,9 @@ export async function openTask(ctx: Context, input: OpenTask): Promise<TaskPage>
   return getTask(ctx, id);
 }
 
-function openAdHoc(ctx: Context, unit: UnitRow, input: OpenTask): Promise<string> {
+async function openAdHoc(ctx: Context, unit: UnitRow, input: OpenTask): Promise<string> {
   const title = input.title ?? '';
+  const versionId = await findVersion(ctx, input.procedureId ?? null);
   return runTransaction(ctx.db, async (trx) => {
     let defectId: string | null = null;
     if (input.holdsUnit) {
@@ -53,6 +55,7 @@ function openAdHoc(ctx: Context, unit: UnitRow, input: OpenTask): Promise<string
       title,
       origin: 'person',
       defect_id: defectId,
+      procedure_version_id: versionId,
     });
     return id;
   });
@@ -63,6 +66,9 @@ async function openOfRule(ctx: Context, unit: UnitRow, ruleId: string, input: Op
   if (!rule) throw refuseField('ruleId', 'is no rule of this fleet', 'not_found');
   if (rule.ended_at || !ruleApplies(rule.scope, toScopedUnit(unit)))
     throw refuseField('ruleId', 'is a rule that does not apply to this unit');
+  const versionId = rule.procedure_id
+    ? ((await findCurrentVersionId(ctx.db, rule.procedure_id)) ?? null)
+    : null;
   const taken = 'has an open task on this unit already';
   const { id } = await refusingTaken({ task_open_rule: ['ruleId', taken] }, () =>
     insertTask(ctx.db, {
@@ -71,10 +77,19 @@ async function openOfRule(ctx: Context, unit: UnitRow, ruleId: string, input: Op
       title: rule.name,
       origin: 'rule',
       rule_id: rule.id,
+      procedure_version_id: versionId,
       expected_minutes: computeMinutes(rule.labour, { carbCount: unit.carb_count, engines: unit.engines }),
     }),
   );
   return id;
+}
+
+/** The version of a procedure that a task keeps. Throws `invalid_input` on `procedureId` for one not in use. */
+async function findVersion(ctx: Context, procedureId: string | null): Promise<string | null> {
+  if (procedureId === null) return null;
+  const versionId = await findCurrentVersionId(ctx.db, procedureId);
+  if (!versionId) throw refuseField('procedureId', 'is no procedure in use');
+  return versionId;
 }
 
 function commonColumns(ctx: Context, unit: UnitRow, input: OpenTask) {

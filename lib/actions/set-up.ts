@@ -3,12 +3,13 @@ import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import { Refusal } from '@/lib/errors';
 import type { SetUp, SetUpDone } from '@/lib/schemas/setup';
+import { addStarterProcedures } from './add-starter-procedures';
 import { checkNewPassword } from './check-new-password';
 import { createDock } from './create-dock';
 import { createPerson } from './create-person';
 
 /**
- * Names the operator of an empty server, with its first dock and first manager: once. Of two at the same time one
+ * Names the operator of an empty server, with its first dock, first manager and the starter procedures: once. Of two at the same time one
  * waits for the other and is refused. The caller has checked the token. Throws `already_set_up`, `invalid_input`.
  */
 export async function setUp(ctx: Context, input: Omit<SetUp, 'token'>): Promise<SetUpDone> {
@@ -19,6 +20,7 @@ export async function setUp(ctx: Context, input: Omit<SetUp, 'token'>): Promise<
     const inside = { ...ctx, db: trx };
     await insertOnlyOperator(inside, input.operatorName);
     const dock = await createDock(inside, input.dock);
+    await addStarterProcedures(inside);
     const manager = await createPerson(inside, { name, email, role: 'manager', password });
     return { operatorName: input.operatorName, dock, manager };
   });

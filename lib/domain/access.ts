@@ -56,6 +56,8 @@ const FLEET_WIDE = {
   'dock.read': { roles: EVERYONE, allDocks: false },
   'model.read': { roles: EVERYONE, allDocks: false },
   'rule.read': { roles: EVERYONE, allDocks: false },
+  'procedure.read': { roles: EVERYONE, allDocks: false },
+  'procedure.write': { roles: WORKSHOP, allDocks: true },
   'rule.preview': { roles: EVERYONE, allDocks: false },
   'worker.read': { roles: EVERYONE, allDocks: false },
   'dock.write': { roles: MANAGER, allDocks: true },

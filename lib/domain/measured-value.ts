@@ -65,6 +65,7 @@ export function isMeasuredUnit(name: string): name is MeasuredUnit {
   return Object.hasOwn(UNITS, name);
 }
 
+/** What a unit of measure measures. */
 export function dimensionOf(unit: MeasuredUnit): Dimension {
   return UNITS[unit].dimension;
 }

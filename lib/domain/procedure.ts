@@ -6,7 +6,12 @@ import type { UnitCounts } from './rule';
 export type Per = 'unit' | 'engine' | 'cylinder' | 'carb';
 /** As found, before the work; as left, after it (metrology's terms). */
 export type Stage = 'found' | 'left';
+/** What a task can be. */
+export type TaskKind = 'inspection' | 'service' | 'rebuild' | 'repair';
 export type StepKind = 'check' | 'measurement' | 'note' | 'photo' | 'caution';
+
+/** How an earlier step came out. */
+export type Condition = { step: string; outcome: 'pass' | 'fail' };
 
 export type Step = {
   /** Names the step within its procedure, in every version of it. */
@@ -20,14 +25,14 @@ export type Step = {
   required: boolean;
   /** Of a measurement: the spec it is judged by, the unit of measure it is taken in, before and after or only one. */
   measures?: { spec: string; unit: MeasuredUnit; stages: Stage[] } | undefined;
-  /** Done only where an earlier step came out like this. */
-  when?: { step: string; outcome: 'pass' | 'fail' } | undefined;
+  /** Done only where any of these earlier steps came out like this. */
+  when?: Condition[] | undefined;
   /** What a failing step opens, for that place alone. */
   onFail?:
     | {
         open: 'task' | 'defect';
         title: string;
-        kind?: 'inspection' | 'service' | 'rebuild' | 'repair' | undefined;
+        kind?: TaskKind | undefined;
         holdsUnit: boolean;
         procedureId?: string | undefined;
       }
@@ -115,7 +120,7 @@ export function computeSteps({ steps, counts, specs, entries, only = null }: Wor
       }),
     });
   }
-  return states;
+  return states.map((state) => settleByLater(state, states));
 }
 
 /** A step that is wanted and has no result. */
@@ -154,17 +159,27 @@ export function countDone(states: readonly StepState[]): { done: number; of: num
   return { done: wanted.filter(({ done }) => done).length, of: wanted.length };
 }
 
+/** Any of the conditions is enough; while none is met and one is not known yet, the step waits. */
+function computeApplies(step: Step, place: number, earlier: readonly StepState[]): PlaceState['applies'] {
+  if (!step.when) return 'yes';
+  const met = step.when.map((condition) => meets(condition, step, place, earlier));
+  return met.includes('yes') ? 'yes' : met.includes('waits') ? 'waits' : 'no';
+}
+
 /**
  * Place by place where both steps are done once for the same thing. A step done once for the unit follows when any
  * place came out like that; so does one done for another thing.
  */
-function computeApplies(step: Step, place: number, earlier: readonly StepState[]): PlaceState['applies'] {
-  const { when } = step;
-  if (!when) return 'yes';
-  const on = earlier.find((state) => state.step.key === when.step);
+function meets(
+  { step: key, outcome: wanted }: Condition,
+  step: Step,
+  place: number,
+  earlier: readonly StepState[],
+): PlaceState['applies'] {
+  const on = earlier.find((state) => state.step.key === key);
   if (!on) return 'no';
   const places = on.step.per === step.per ? on.places.filter((state) => state.place === place) : on.places;
-  if (places.some(({ applies, outcome }) => applies === 'yes' && outcome === when.outcome)) return 'yes';
+  if (places.some(({ applies, outcome }) => applies === 'yes' && outcome === wanted)) return 'yes';
   return places.some(({ applies, done }) => applies === 'waits' || (applies === 'yes' && !done))
     ? 'waits'
     : 'no';
@@ -207,6 +222,24 @@ function settleMeasurement(stages: readonly Stage[], found: Judgement | null, le
     outcome !== null &&
     (outcome === 'pass' || !stages.includes('left') || (left !== null && passes(left) !== null));
   return { outcome, last, done: settled };
+}
+
+/** What one step measures as found another may measure as left: then that says how it stands at last. */
+function settleByLater(state: StepState, states: readonly StepState[]): StepState {
+  const { measures } = state.step;
+  if (!measures || measures.stages.includes('left')) return state;
+  const later = states.filter(
+    ({ step }) => step.measures?.spec === measures.spec && step.per === state.step.per,
+  );
+  return {
+    ...state,
+    places: state.places.map((one) => {
+      const left = later
+        .flatMap(({ places }) => places)
+        .findLast(({ place, leftJudgement }) => place === one.place && leftJudgement !== null)?.leftJudgement;
+      return left ? { ...one, last: passes(left) ?? one.last } : one;
+    }),
+  };
 }
 
 function settleEntry(entry: EntryValue | null): Pick<PlaceState, 'outcome' | 'last' | 'done'> {

@@ -4,12 +4,14 @@ import { FLEET_OPERATIONS } from './operations-fleet';
 import { OFFICE_OPERATIONS } from './operations-office';
 import { SERVER_OPERATIONS } from './operations-server';
 import { WORK_OPERATIONS } from './operations-work';
+import { WORKSHOP_OPERATIONS } from './operations-workshop';
 
 /** Every operation of the API: the OpenAPI document is made from these, and the routes are held to them. */
 export const OPERATIONS: readonly Operation[] = [
   ...FLEET_OPERATIONS,
   ...DOCKSIDE_OPERATIONS,
   ...WORK_OPERATIONS,
+  ...WORKSHOP_OPERATIONS,
   ...OFFICE_OPERATIONS,
   ...SERVER_OPERATIONS,
 ];

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { URGENCIES } from '@/lib/domain/urgency';
+import { taskProcedure } from './procedure';
 import { day, hours, id, instant, line, pageQuery, text } from './common';
 
 export const TASK_KINDS = ['inspection', 'service', 'rebuild', 'repair'] as const;
@@ -19,6 +20,7 @@ export const openTask = z
     detail: detail.optional(),
     plannedOn: day.optional(),
     holdsUnit: z.boolean('is true or false').optional(),
+    procedureId: id.optional(),
   })
   .superRefine((input, ctx) => {
     const say = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });
@@ -31,6 +33,7 @@ export const openTask = z
       if (input.kind !== undefined) say('kind', 'comes from the rule: leave it out');
       if (input.title !== undefined) say('title', 'comes from the rule: leave it out');
       if (input.holdsUnit !== undefined) say('holdsUnit', 'comes from the rule: leave it out');
+      if (input.procedureId !== undefined) say('procedureId', 'comes from the rule: leave it out');
     }
   });
 
@@ -169,6 +172,8 @@ export const taskPage = task.extend({
   /** What the task's rule means, sentence by sentence; empty for a task without one. */
   ruleWords: z.array(z.string()),
   heldSince: z.string().nullable(),
+  /** The procedure that the work follows, in the version that stood when the task was opened. */
+  procedure: taskProcedure.nullable(),
   notes: z.array(taskNote),
   /** This task's own, and those of the same rule on the same unit: the latest first, reversed ones included. */
   closures: z.array(closure),

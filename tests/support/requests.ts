@@ -45,6 +45,8 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
   ];
   const logged = (unit: string, hours: number, more: object = {}) =>
     post('/readings', { id: randomUUID(), unitId: unit, hours, at: minutesAgo(60).toISOString(), ...more });
+  const procedure = (name: string) =>
+    post('/procedures', { name, kind: 'service', steps: [{ key: 'look', kind: 'check', title: 'Look' }] });
   const outingUnit = await addUnit('N-5');
   await refreshDue(asSystem(database.db, new Date()), { unitIds: [outingUnit.id] });
   return {
@@ -76,6 +78,8 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
       await post('/invitations', { name: 'Ada Reef', email: 'ada@wakewright.example', role: 'dock' })
     ).id,
     apiKeyId: (await post('/api-keys', { name: 'The till' })).id,
+    procedureId: (await procedure('Flush')).id,
+    spareProcedureId: (await procedure('Flush twice')).id,
     personId: hand.personId,
   };
 }

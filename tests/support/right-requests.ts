@@ -9,7 +9,14 @@ const refused = { elsewhere: 'refused' } as const;
 
 /** A right request for every operation that wants signing in, by its id. */
 export function rightRequests(world: World): Record<string, RightRequest> {
-  return { ...ofFleet(world), ...ofUnits(world), ...ofDockside(world), ...ofWork(world), ...ofOffice(world) };
+  return {
+    ...ofFleet(world),
+    ...ofUnits(world),
+    ...ofDockside(world),
+    ...ofWork(world),
+    ...ofWorkshop(world),
+    ...ofOffice(world),
+  };
 }
 
 function ofFleet({ home }: World): Record<string, RightRequest> {
@@ -185,6 +192,26 @@ function ofWork(world: World): Record<string, RightRequest> {
       roles: EVERYONE,
       ...refused,
     },
+  };
+}
+
+function ofWorkshop({ procedureId, spareProcedureId }: World): Record<string, RightRequest> {
+  const steps = [
+    { key: 'test', kind: 'check', title: 'It holds', per: 'carb', required: true },
+    { key: 'mend', kind: 'note', title: 'What was done', when: [{ step: 'test', outcome: 'fail' }] },
+  ];
+  const procedure = { name: 'Leak test', kind: 'inspection', steps, note: 'First go' };
+  return {
+    listProcedures: { roles: EVERYONE },
+    createProcedure: { body: procedure, roles: WORKSHOP, ...refused },
+    getProcedure: { params: { id: procedureId }, roles: EVERYONE },
+    changeProcedure: {
+      params: { id: procedureId },
+      body: { ...procedure, name: 'Leak test, later' },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    retireProcedure: { params: { id: spareProcedureId }, roles: WORKSHOP, ...refused },
   };
 }
 

@@ -34,7 +34,7 @@ const STEPS: Step[] = [
     title: 'Renew needle and seat',
     per: 'carb',
     required: true,
-    when: { step: 'pop-off', outcome: 'fail' },
+    when: [{ step: 'pop-off', outcome: 'fail' }],
   },
   {
     key: 'report',
@@ -42,7 +42,7 @@ const STEPS: Step[] = [
     title: 'Say what was wrong',
     per: 'unit',
     required: true,
-    when: { step: 'pop-off', outcome: 'fail' },
+    when: [{ step: 'pop-off', outcome: 'fail' }],
   },
   { key: 'screws', kind: 'check', title: 'Screw heads are whole', per: 'carb', required: true },
 ];
@@ -133,6 +133,37 @@ test('one run of two is no result yet', () => {
   ]);
 });
 
+test('either of two failing steps is enough, and both must be known before the step is spared', () => {
+  const holds: Step = { key: 'holds', kind: 'check', title: 'Needle holds', per: 'carb', required: true };
+  const set: Step = { key: 'set', kind: 'check', title: 'Set it', per: 'carb', required: true };
+  const when = ['pop-off', 'holds'].map((step) => ({ step, outcome: 'fail' as const }));
+  const steps = [STEPS[1]!, holds, { ...set, when }];
+  const applies = (...entries: StepEntry[]) =>
+    computeSteps({ steps, counts: { ...TWIN, carbCount: 1 }, specs: SPECS, entries })[2]!.places[0]!.applies;
+  const good = popOff(1, 'found', '25', '25');
+  expect(applies(good)).toBe('waits');
+  expect(applies(good, entry('holds', 1, pass))).toBe('no');
+  expect(applies(good, entry('holds', 1, { kind: 'check', outcome: 'fail' }))).toBe('yes');
+  expect(applies(popOff(1, 'found', '18', '18'))).toBe('yes');
+});
+
+test('what one step measures as found stands at last as another step measures it as left', () => {
+  const measures = { spec: 'Pop-off pressure', unit: 'psi' as const };
+  const steps: Step[] = [
+    { ...STEPS[1]!, measures: { ...measures, stages: ['found'] } },
+    { ...STEPS[1]!, key: 'closed', measures: { ...measures, stages: ['left'] } },
+  ];
+  const failures = (...entries: StepEntry[]) =>
+    findOpenFailures(computeSteps({ steps, counts: TWIN, specs: SPECS, entries })).map(({ step, place }) => [
+      step.key,
+      place,
+    ]);
+  const bad = popOff(2, 'found', '18', '18');
+  expect(failures(bad)).toEqual([['pop-off', 2]]);
+  expect(failures(bad, entry('closed', 2, runs('psi', '26', '26'), 'left'))).toEqual([]);
+  expect(failures(bad, entry('closed', 1, runs('psi', '26', '26'), 'left'))).toEqual([['pop-off', 2]]);
+});
+
 test('a follow-up for one carburettor has that one alone', () => {
   const states = work([], { only: { per: 'carb', place: 2 } });
   expect(states.map(({ step, places }) => [step.key, places.map(({ place }) => place)])).toEqual([
@@ -153,7 +184,7 @@ test('a check that does not apply settles what depends on it: it is not done', (
       title: 'Renew it',
       per: 'unit',
       required: true,
-      when: { step: 'a', outcome: 'fail' },
+      when: [{ step: 'a', outcome: 'fail' }],
     },
   ];
   const states = computeSteps({
