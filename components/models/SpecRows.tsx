@@ -10,7 +10,21 @@ type Props = {
   onChange: (rows: SpecDraft[]) => void;
 };
 
-const EMPTY = { name: '', min: '', target: '', max: '', unit: '' };
+const EMPTY = {
+  name: '',
+  min: '',
+  target: '',
+  max: '',
+  unit: '',
+  repeats: '',
+  maxSpread: '',
+  maxDifference: '',
+};
+const MORE = {
+  repeats: { label: 'Runs wanted', hint: undefined },
+  maxSpread: { label: 'Runs within', hint: 'As 1, or 5 %.' },
+  maxDifference: { label: 'Places within', hint: 'Carburettors or cylinders: as 2, or 10 %.' },
+};
 
 /** The limits of the model's measurements: a row each, by name. */
 export function SpecRows({ rows, disabled, error, onChange }: Props) {
@@ -55,8 +69,23 @@ export function SpecRows({ rows, disabled, error, onChange }: Props) {
                 error={error(`spec.${row.key}.unit`)}
                 onChange={(event) => change(row.key, { unit: event.target.value })}
               />
+              <div className="grid items-end gap-x-4 gap-y-3 sm:col-span-full sm:row-start-2 sm:grid-cols-3">
+                {(['repeats', 'maxSpread', 'maxDifference'] as const).map((field) => (
+                  <TextInput
+                    key={field}
+                    id={`spec.${row.key}.${field}`}
+                    label={MORE[field].label}
+                    hint={MORE[field].hint}
+                    optional
+                    inputMode={field === 'repeats' ? 'numeric' : 'text'}
+                    value={row[field]}
+                    error={error(`spec.${row.key}.${field}`)}
+                    onChange={(event) => change(row.key, { [field]: event.target.value })}
+                  />
+                ))}
+              </div>
               {disabled ? null : (
-                <div className="sm:mt-7.5">
+                <div className="sm:col-start-6 sm:row-start-1 sm:mt-7.5">
                   <Button
                     kind="quiet"
                     aria-label={`Remove ${row.name || 'this spec'}`}

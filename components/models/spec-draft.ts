@@ -2,9 +2,22 @@ import type { Failure } from '@/lib/client/api';
 import type { Model, Spec } from '@/lib/schemas/model';
 
 /** One spec as it is typed; `key` tells rows apart while names change. */
-export type SpecDraft = { key: number; name: string; min: string; target: string; max: string; unit: string };
+export type SpecDraft = {
+  key: number;
+  name: string;
+  min: string;
+  target: string;
+  max: string;
+  unit: string;
+  repeats: string;
+  /** How far apart: an amount in the spec's unit, or a percentage as '10 %'. */
+  maxSpread: string;
+  maxDifference: string;
+};
 
-const LIMITS = ['min', 'target', 'max'] as const;
+const LIMITS = ['min', 'target', 'max', 'repeats'] as const;
+const ALLOWANCES = ['maxSpread', 'maxDifference'] as const;
+const TEXTS = [...LIMITS, ...ALLOWANCES, 'name', 'unit'] as const;
 
 /** A model's specs as rows to type in, in their order. */
 export function draftSpecs(specs: Model['specs']): SpecDraft[] {
@@ -15,6 +28,9 @@ export function draftSpecs(specs: Model['specs']): SpecDraft[] {
     target: spec.target?.toString() ?? '',
     max: spec.max?.toString() ?? '',
     unit: spec.unit ?? '',
+    repeats: spec.repeats?.toString() ?? '',
+    maxSpread: allowanceText(spec.maxSpread),
+    maxDifference: allowanceText(spec.maxDifference),
   }));
 }
 
@@ -25,9 +41,7 @@ export function draftSpecs(specs: Model['specs']): SpecDraft[] {
 export function readSpecs(
   rows: readonly SpecDraft[],
 ): { specs: Model['specs'] } | { errors: Failure['errors'] } {
-  const filled = rows.filter((row) =>
-    [row.name, row.min, row.target, row.max, row.unit].some((text) => text.trim()),
-  );
+  const filled = rows.filter((row) => TEXTS.some((field) => row[field].trim()));
   const errors = filled.flatMap((row) => {
     const name = row.name.trim();
     const path = `spec.${row.key}.name`;
@@ -39,14 +53,26 @@ export function readSpecs(
   return { specs: Object.fromEntries(filled.map((row) => [row.name.trim(), readSpec(row)])) };
 }
 
+const allowanceText = (allowed: Spec['maxSpread']) =>
+  allowed ? `${allowed.amount}${allowed.of === 'percent' ? ' %' : ''}` : '';
+
 /** Text that is no number goes as it is, for the API to refuse by name. */
+function readNumber(text: string): number | string {
+  const number = text.trim().replace(',', '.');
+  return Number.isFinite(Number(number)) ? Number(number) : number;
+}
+
 function readSpec(row: SpecDraft): Spec {
-  const limits = LIMITS.flatMap((field) => {
-    const text = row[field].trim().replace(',', '.');
+  const limits = LIMITS.flatMap((field) => (row[field].trim() ? [[field, readNumber(row[field])]] : []));
+  const allowances = ALLOWANCES.flatMap((field) => {
+    const text = row[field].trim();
     if (text === '') return [];
-    return [[field, Number.isFinite(Number(text)) ? Number(text) : text]];
+    const percent = text.endsWith('%');
+    const amount = readNumber(percent ? text.slice(0, -1) : text);
+    return [[field, { amount, of: percent ? 'percent' : 'unit' }]];
   });
-  return { ...Object.fromEntries(limits), ...(row.unit.trim() && { unit: row.unit.trim() }) } as Spec;
+  const unit = row.unit.trim();
+  return { ...Object.fromEntries([...limits, ...allowances]), ...(unit && { unit }) } as Spec;
 }
 
 /** Where the API's path of a spec stands on screen: 'specs.Compression.max' is 'spec.3.max'. */
@@ -56,5 +82,5 @@ export function specPath(path: string, rows: readonly SpecDraft[]): string {
   );
   if (!row) return path;
   const field = path.slice(`specs.${row.name.trim()}.`.length);
-  return `spec.${row.key}.${field || 'name'}`;
+  return `spec.${row.key}.${field.split('.')[0] || 'name'}`;
 }

@@ -2,6 +2,7 @@ import { Button } from '@/components/ui/Button';
 import { Checkbox } from '@/components/ui/Checkbox';
 import { Notice } from '@/components/ui/Notice';
 import { RadioGroup } from '@/components/ui/RadioGroup';
+import { Select } from '@/components/ui/Select';
 import { TextInput } from '@/components/ui/TextInput';
 import type { RuleFormData } from '@/lib/schemas/rule-form';
 import { KIND_WORDS } from './due-words';
@@ -56,6 +57,18 @@ export function RuleFields({
           value={draft.kind}
           disabled={readOnly}
           onChange={(event) => change('kind', { kind: event.target.value as RuleDraft['kind'] })}
+        />
+        <Select
+          label="Procedure"
+          optional
+          id="procedureId"
+          hint="The steps that its tasks follow."
+          placeholder="None"
+          options={data.procedures.map(({ id, name }) => ({ value: id, label: name }))}
+          value={draft.procedureId}
+          disabled={readOnly}
+          error={errorOf('procedureId')}
+          onChange={(event) => change('procedureId', { procedureId: event.target.value })}
         />
       </Section>
       <Section

@@ -44,6 +44,8 @@ export type RuleDraft = {
   carbMin: string;
   carbMax: string;
   holdsUnit: boolean;
+  /** Empty for none. */
+  procedureId: string;
 };
 
 export function newTrigger(key: number, on: TriggerShape['on'], today: CalendarDay): TriggerDraft {
@@ -64,6 +66,7 @@ export function newDraft(today: CalendarDay): RuleDraft {
     carbMin: '',
     carbMax: '',
     holdsUnit: true,
+    procedureId: '',
   };
 }
 
@@ -89,6 +92,7 @@ export function draftOf(rule: Rule, today: CalendarDay): RuleDraft {
     carbMin: String(appliesTo.carbCount?.min ?? ''),
     carbMax: String(appliesTo.carbCount?.max ?? ''),
     holdsUnit: rule.holdsUnit,
+    procedureId: rule.procedureId ?? '',
   };
 }
 
@@ -125,6 +129,7 @@ export function toInput(draft: RuleDraft) {
       lateDays: amount('lateDays'),
     },
     holdsUnit: draft.holdsUnit,
+    procedureId: draft.procedureId || null,
     labour: {
       baseMinutes: amount('baseMinutes'),
       perCarbMinutes: amount('perCarbMinutes'),

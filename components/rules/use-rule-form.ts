@@ -39,7 +39,6 @@ export function useRuleForm(rule: Rule | null, today: string, readOnly: boolean)
       ? await send<Rule>('PUT', `/api/v1/rules/${rule.id}`, {
           ...checked.input,
           parts: rule.parts,
-          procedureId: rule.procedureId,
           revision: rule.revision,
         })
       : await send<Rule>('POST', '/api/v1/rules', checked.input);

@@ -9,12 +9,13 @@ const CALENDAR = { href: '/calendar', label: 'Calendar' };
 const TASKS = { href: '/tasks', label: 'Tasks' };
 const UNITS = { href: '/units', label: 'Units' };
 const RULES = { href: '/rules', label: 'Rules' };
+const PROCEDURES = { href: '/procedures', label: 'Procedures' };
 const ACCOUNT = { href: '/account', label: 'Account' };
 
 /** Where each role goes, in order of weight: the first answers its first question and is its home. */
 const BY_ROLE: Record<Role, Destination[]> = {
   dock: [BOARD, AVAILABILITY, UNITS, CALENDAR, TASKS, ACCOUNT],
-  mechanic: [TASKS, CALENDAR, AVAILABILITY, BOARD, UNITS, RULES, ACCOUNT],
+  mechanic: [TASKS, CALENDAR, AVAILABILITY, BOARD, UNITS, RULES, PROCEDURES, ACCOUNT],
   manager: [
     AVAILABILITY,
     CALENDAR,
@@ -22,6 +23,7 @@ const BY_ROLE: Record<Role, Destination[]> = {
     BOARD,
     UNITS,
     RULES,
+    PROCEDURES,
     { href: '/review', label: 'Review' },
     { href: '/digest', label: 'Digest' },
     { href: '/docks', label: 'Docks' },

@@ -15,7 +15,15 @@ import { AD_HOC_KINDS, type TaskPage } from '@/lib/schemas/task';
 import { kindWords } from './task-words';
 
 /** Opens a task on a unit; a repair may hold it. */
-export function NewTaskForm({ units, unitId }: { units: SelectOption[]; unitId: string }) {
+export function NewTaskForm({
+  units,
+  unitId,
+  procedures,
+}: {
+  units: SelectOption[];
+  unitId: string;
+  procedures: SelectOption[];
+}) {
   const { busy, failure, run } = useSend();
   const [kind, setKind] = useState<string>('repair');
   const router = useRouter();
@@ -28,6 +36,7 @@ export function NewTaskForm({ units, unitId }: { units: SelectOption[]; unitId: 
       kind,
       title: text('title'),
       ...(text('detail') && { detail: text('detail') }),
+      ...(text('procedureId') && { procedureId: text('procedureId') }),
       ...(text('plannedOn') && { plannedOn: text('plannedOn') }),
       ...(kind === 'repair' && { holdsUnit: given.get('holdsUnit') !== null }),
     };
@@ -62,6 +71,14 @@ export function NewTaskForm({ units, unitId }: { units: SelectOption[]; unitId: 
       />
       <TextInput name="title" label="What is to be done" maxLength={120} error={error('title')} />
       <Textarea name="detail" label="Details" optional rows={4} error={error('detail')} />
+      <Select
+        name="procedureId"
+        label="Procedure"
+        optional
+        placeholder="None"
+        options={procedures}
+        error={error('procedureId')}
+      />
       <TextInput name="plannedOn" type="date" label="Plan for" optional error={error('plannedOn')} />
       {kind === 'repair' ? (
         <Checkbox

@@ -4,6 +4,7 @@ import { createDock } from '@/lib/actions/create-dock';
 import { createModel } from '@/lib/actions/create-model';
 import { createRule } from '@/lib/actions/create-rule';
 import { createUnit } from '@/lib/actions/create-unit';
+import { listProcedures } from '@/lib/actions/list-procedures';
 import { recordBaseline } from '@/lib/actions/record-baseline';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import { setUp } from '@/lib/actions/set-up';
@@ -21,7 +22,7 @@ import { writeHistory } from './history';
 import { MODELS } from './models';
 import { addCrew, DEMO_MANAGER, DEMO_PASSWORD, type Crew } from './people';
 import { chanceOf } from './random';
-import { listDemoRules, RULE_KEYS, type RuleKey } from './rules';
+import { listDemoRules, PROCEDURE_NAMES, RULE_KEYS, type RuleKey } from './rules';
 import { planOutings } from './season';
 import { listDemoUnits, type DemoUnit } from './units';
 
@@ -81,10 +82,14 @@ async function furnish(ctx: Context, start: CalendarDay): Promise<House> {
     docks.map(({ id }) => id),
     ctx.now,
   );
+  const procedures = new Map((await listProcedures(ctx)).map(({ id, name }) => [name, id]));
   const byKey = {} as Record<RuleKey, Rule>;
   const inputs = listDemoRules(partsOfDay(start).year, docks.at(-1)!.id);
   for (const key of RULE_KEYS)
-    byKey[key] = await createRule({ ...ctx, actor: crews[0]!.manager }, inputs[key]);
+    byKey[key] = await createRule(
+      { ...ctx, actor: crews[0]!.manager },
+      { ...inputs[key], procedureId: procedures.get(PROCEDURE_NAMES[key] ?? inputs[key].name) ?? null },
+    );
   const rules = new Map(Object.values(byKey).map((rule) => [rule.id, rule]));
   return { docks, models, crews, rules, byKey };
 }

@@ -18,6 +18,12 @@ export const RULE_KEYS = [
 ] as const;
 export type RuleKey = (typeof RULE_KEYS)[number];
 
+/** A rule of the demo follows the starter procedure of its own name, else this one. */
+export const PROCEDURE_NAMES: Partial<Record<RuleKey, string>> = {
+  popOff: 'Pop-off test',
+  layUp: 'Winter lay-up',
+};
+
 type Given = (typeof createRule)['_zod']['input'];
 /** A rule as the API takes it, but for what depends on the year and the docks. */
 type Duty = Omit<Given, 'appliesTo' | 'triggers'> & {

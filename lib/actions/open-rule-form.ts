@@ -1,5 +1,6 @@
 import { listDocks } from '@/db/queries/docks';
 import { listModels } from '@/db/queries/models';
+import { listProcedures } from '@/db/queries/procedures';
 import { listUnits } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
 import { canFleetWide, visibleDocks } from '@/lib/domain/access';
@@ -16,17 +17,19 @@ import { getRule } from './get-rule';
 export async function openRuleForm(ctx: Context, ruleId: string | null): Promise<RuleFormData> {
   requireFleetWide(ctx, ruleId ? 'rule.read' : 'rule.write');
   const docks = visibleDocks(ctx.actor);
-  const [rule, models, dockRows, units] = await Promise.all([
+  const [rule, models, dockRows, units, procedures] = await Promise.all([
     ruleId ? getRule(ctx, ruleId) : null,
     listModels(ctx.db),
     listDocks(ctx.db, docks),
     listUnits(ctx.db, docks),
+    listProcedures(ctx.db),
   ]);
   return {
     rule,
     mayWrite: canFleetWide(ctx.actor, 'rule.write'),
     models: models.map(({ id, name, propulsion, stroke }) => ({ id, name, propulsion, stroke })),
     docks: dockRows.map(({ id, name, time_zone }) => ({ id, name, today: localDay(ctx.now, time_zone) })),
+    procedures: procedures.map(({ id, name }) => ({ id, name })),
     fleet: units.map((unit) => ({
       id: unit.id,
       fleetNumber: unit.fleet_number,

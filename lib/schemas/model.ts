@@ -8,11 +8,30 @@ const whole = (max: number) =>
 
 const limit = z.number('give a number').min(-1e9, 'is too small').max(1e9, 'is too large').optional();
 
-/** The limits of one measurement, each optional, in the unit of measure named: `{"min": 150, "unit": "psi"}`. */
+/** How much is allowed: an amount in the spec's unit of measure, or a percentage of the largest value. */
+const allowance = z
+  .strictObject({
+    amount: z.number('give a number').min(0, 'cannot be below 0').max(1e9, 'is too large'),
+    of: z.enum(['unit', 'percent'], 'is unit or percent'),
+  })
+  .optional();
+
+/**
+ * The limits of one measurement, each optional, in the unit of measure named: `{"min": 150, "unit": "psi"}`; how many
+ * runs are wanted, how far they may lie apart, and how far carburettors, cylinders or engines may.
+ */
 const spec = z
   .strictObject(
-    { min: limit, max: limit, target: limit, unit: line(20).optional() },
-    'give min, max, target or unit',
+    {
+      min: limit,
+      max: limit,
+      target: limit,
+      unit: line(20).optional(),
+      repeats: z.int('give a whole number').min(1, 'is at least 1').max(10, 'is at most 10').optional(),
+      maxSpread: allowance,
+      maxDifference: allowance,
+    },
+    'give min, max, target, unit, repeats, maxSpread or maxDifference',
   )
   .superRefine(({ min, max, target }, ctx) => {
     const say = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });

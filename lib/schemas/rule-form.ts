@@ -8,6 +8,8 @@ export type RuleFormData = {
   models: { id: string; name: string; propulsion: Propulsion; stroke: Stroke | null }[];
   /** `today` is the day it is at the dock. */
   docks: { id: string; name: string; today: string }[];
+  /** Those in use. */
+  procedures: { id: string; name: string }[];
   fleet: {
     id: string;
     fleetNumber: string;

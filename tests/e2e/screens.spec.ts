@@ -18,7 +18,7 @@ const FOR_ANYBODY = ['/sign-in', '/forgot', '/reset/nonsense', '/invitation/nons
 type Rows = Awaited<ReturnType<typeof listRows>>;
 const manager = (rows: Rows) => [
   ...['/board', '/availability', '/units', '/calendar', '/calendar?view=list', '/tasks', '/account'],
-  ...['/review', '/digest', '/docks', '/models', '/people', '/rules'],
+  ...['/review', '/digest', '/docks', '/models', '/people', '/rules', '/procedures'],
   ...['/units/new', '/docks/new', '/models/new', '/rules/new', '/tasks/new'],
   ...[
     `/units/${rows.ready}`,
@@ -27,7 +27,13 @@ const manager = (rows: Rows) => [
     `/units/${rows.ready}/baselines`,
   ],
   ...[`/board/check-out/${rows.ready}`, `/board/check-out/${rows.held}`, `/board/check-in/${rows.ready}`],
-  ...[`/tasks/${rows.task}`, `/rules/${rows.rule}`, `/docks/${rows.dock}`, `/models/${rows.model}`],
+  ...[
+    `/tasks/${rows.task}`,
+    `/rules/${rows.rule}`,
+    `/docks/${rows.dock}`,
+    `/models/${rows.model}`,
+    `/procedures/${rows.procedure}`,
+  ],
 ];
 const mechanic = (rows: Rows) => [
   '/tasks',
@@ -56,6 +62,7 @@ async function listRows({ request }: Page) {
     rule: await first('rules'),
     dock: await first('docks'),
     model: await first('models'),
+    procedure: await first('procedures'),
   };
 }
 
@@ -111,7 +118,7 @@ test('every page there is is looked at', () => {
   const id = 'x';
   const looked = [
     ...FOR_ANYBODY,
-    ...manager({ ready: id, held: id, task: id, rule: id, dock: id, model: id }),
+    ...manager({ ready: id, held: id, task: id, rule: id, dock: id, model: id, procedure: id }),
   ];
   const missed = listRoutes().filter(
     ({ pattern }) => !looked.some((path) => pattern.test(path.split('?')[0]!)),

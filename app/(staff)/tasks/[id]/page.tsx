@@ -1,5 +1,7 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { cache } from 'react';
+import { BenchSheet } from '@/components/procedures/BenchSheet';
 import { Cautions } from '@/components/task/Cautions';
 import { CloseForm } from '@/components/task/CloseForm';
 import { ClosureList } from '@/components/task/ClosureList';
@@ -51,6 +53,23 @@ export default async function TaskPage({ params }: Props) {
         <div className="grid content-start gap-8">
           <TaskFacts task={task} now={now} />
           {open ? <Cautions kind={task.kind} /> : null}
+          {task.procedure ? (
+            <section className="grid gap-2" aria-labelledby="procedure">
+              <h2 id="procedure" className="text-2xl">
+                Procedure
+              </h2>
+              <p className="text-ink-soft">
+                <Link
+                  href={`/procedures/${task.procedure.id}`}
+                  className="link inline-flex min-h-target items-center"
+                >
+                  {task.procedure.name}
+                </Link>
+                , version {task.procedure.version}, as it stood when this task was opened.
+              </p>
+              <BenchSheet steps={task.procedure.steps} />
+            </section>
+          ) : null}
           <section className="grid gap-4" aria-labelledby="notes">
             <h2 id="notes" className="text-2xl">
               Notes

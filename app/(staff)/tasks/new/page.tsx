@@ -4,6 +4,7 @@ import { EmptyState } from '@/components/ui/EmptyState';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
+import { listProcedures } from '@/lib/actions/list-procedures';
 import { listUnits } from '@/lib/actions/list-units';
 import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
@@ -15,7 +16,7 @@ type Query = { unit?: string | string[] };
 export default async function NewTaskPage({ searchParams }: { searchParams: Promise<Query> }) {
   const ctx = await pageContext();
   const { unit } = await searchParams;
-  const { items } = await listUnits(ctx, {});
+  const [{ items }, procedures] = await Promise.all([listUnits(ctx, {}), listProcedures(ctx)]);
   const units = items.map(({ id, fleetNumber, modelName, dockName }) => ({
     value: id,
     label: `${fleetNumber}, ${modelName}, ${dockName}`,
@@ -45,7 +46,11 @@ export default async function NewTaskPage({ searchParams }: { searchParams: Prom
           A task belongs to a unit. A manager adds the first one.
         </EmptyState>
       ) : (
-        <NewTaskForm units={units} unitId={typeof unit === 'string' ? unit : ''} />
+        <NewTaskForm
+          units={units}
+          unitId={typeof unit === 'string' ? unit : ''}
+          procedures={procedures.map(({ id, name }) => ({ value: id, label: name }))}
+        />
       )}
     </>
   );

@@ -1,0 +1,62 @@
+import type { Metadata } from 'next';
+import { cache } from 'react';
+import { BenchSheet } from '@/components/procedures/BenchSheet';
+import { kindWords } from '@/components/task/task-words';
+import { LinkButton } from '@/components/ui/LinkButton';
+import { Notice } from '@/components/ui/Notice';
+import { PageHeader } from '@/components/ui/PageHeader';
+import { getProcedure } from '@/lib/actions/get-procedure';
+import { pageContext } from '@/lib/auth/page';
+import { orNotFound, pageId } from '@/lib/auth/page-row';
+import { countOf } from '@/lib/domain/words';
+
+type Props = { params: Promise<{ id: string }> };
+
+const load = cache(async (id: string) => orNotFound(getProcedure(await pageContext(), id)));
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  return { title: (await load(await pageId(params))).name };
+}
+
+export default async function ProcedurePage({ params }: Props) {
+  const procedure = await load(await pageId(params));
+  return (
+    <>
+      <PageHeader
+        kicker={`${kindWords[procedure.kind]} · version ${procedure.version}`}
+        title={procedure.name}
+        actions={<LinkButton href="/procedures">All procedures</LinkButton>}
+      />
+      {procedure.retiredAt ? (
+        <Notice tone="warn" title="Retired" still>
+          No rule and no new task can follow it. Tasks opened under it keep it.
+        </Notice>
+      ) : null}
+      <div className="grid gap-x-12 gap-y-8 lg:grid-cols-[3fr_1fr]">
+        <section aria-label="Steps">
+          <BenchSheet steps={procedure.steps} />
+        </section>
+        <section aria-labelledby="versions" className="no-print content-start">
+          <h2 id="versions" className="text-2xl">
+            Versions
+          </h2>
+          <p className="mb-3 text-ink-soft">
+            {countOf(procedure.versions.length, 'version')}, none ever edited.
+          </p>
+          <ol className="grid">
+            {procedure.versions.map(({ version, note, writtenAt, writtenBy }) => (
+              <li key={version} className="grid gap-1 border-t border-hairline py-3">
+                <strong>Version {version}</strong>
+                {note ? <span>{note}</span> : null}
+                <span className="text-ink-soft">
+                  {writtenBy?.name ?? 'Shipped with Wakewright'},{' '}
+                  <time dateTime={writtenAt}>{writtenAt.slice(0, 10)}</time>
+                </span>
+              </li>
+            ))}
+          </ol>
+        </section>
+      </div>
+    </>
+  );
+}
