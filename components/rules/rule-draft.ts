@@ -129,7 +129,7 @@ export function toInput(draft: RuleDraft) {
       lateDays: amount('lateDays'),
     },
     holdsUnit: draft.holdsUnit,
-    procedureId: draft.procedureId || null,
+    ...(draft.procedureId && { procedureId: draft.procedureId }),
     labour: {
       baseMinutes: amount('baseMinutes'),
       perCarbMinutes: amount('perCarbMinutes'),

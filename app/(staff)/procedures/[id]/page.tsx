@@ -8,7 +8,6 @@ import { PageHeader } from '@/components/ui/PageHeader';
 import { getProcedure } from '@/lib/actions/get-procedure';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
-import { countOf } from '@/lib/domain/words';
 
 type Props = { params: Promise<{ id: string }> };
 
@@ -40,9 +39,7 @@ export default async function ProcedurePage({ params }: Props) {
           <h2 id="versions" className="text-2xl">
             Versions
           </h2>
-          <p className="mb-3 text-ink-soft">
-            {countOf(procedure.versions.length, 'version')}, none ever edited.
-          </p>
+          <p className="mb-3 text-ink-soft">The latest first; none is ever edited.</p>
           <ol className="grid">
             {procedure.versions.map(({ version, note, writtenAt, writtenBy }) => (
               <li key={version} className="grid gap-1 border-t border-hairline py-3">

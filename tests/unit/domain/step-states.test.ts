@@ -2,16 +2,8 @@ import { describe, expect, test } from 'vitest';
 import type { MeasuredUnit } from '@/lib/domain/measured-value';
 import { parseMeasured } from '@/lib/domain/measured-value';
 import { mergeSpecs, type Specs } from '@/lib/domain/measurement';
-import {
-  computeSteps,
-  countDone,
-  findMissing,
-  findOpenFailures,
-  type EntryValue,
-  type Stage,
-  type Step,
-  type StepEntry,
-} from '@/lib/domain/procedure';
+import type { EntryValue, Stage, Step, StepEntry } from '@/lib/domain/procedure';
+import { computeSteps, countDone, findMissing, findOpenFailures } from '@/lib/domain/step-states';
 
 const TWIN = { engines: 1, cylinders: 2, carbCount: 2 };
 const SPECS: Specs = {
