@@ -51,4 +51,5 @@ export const MANUAL_FIRST: Step = caution(
   'So do local law and licensed practice. Where they say otherwise than this page, follow them and have the page changed.',
 );
 
+/** Done once for each of these. */
 export const each = (per: Per): More => ({ per });

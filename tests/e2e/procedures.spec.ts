@@ -1,0 +1,50 @@
+import { expect, test } from '../support/e2e';
+import { expectAccessible, pageOf } from '../support/pages';
+
+test('a rule is given a procedure, and its next task shows the steps as they stood when it was opened', async ({
+  browser,
+  fresh,
+}) => {
+  test.setTimeout(120_000);
+  const manager = await pageOf(browser, fresh, 'manager', 1280);
+  await manager.goto('/rules');
+  await manager.getByRole('link', { name: 'Engine oil and filter' }).click();
+  await manager.getByLabel('Procedure').selectOption('Compression test');
+  await manager.getByRole('button', { name: 'Save the rule' }).click();
+  await expect(manager).toHaveURL(/\/rules$/);
+  await manager.goto('/procedures');
+  await expect(manager.getByRole('row', { name: /Compression test/ })).toContainText('Engine oil and filter');
+
+  const mechanic = await pageOf(browser, fresh, 'mechanic', 820);
+  await mechanic.goto('/tasks/new');
+  await mechanic.getByLabel('Unit').selectOption({ index: 1 });
+  await mechanic.getByRole('radio', { name: 'Inspection' }).check();
+  await mechanic.getByLabel('What is to be done').fill('Find out why it is down on power');
+  await mechanic.getByLabel('Procedure').selectOption('Compression test');
+  await mechanic.getByRole('button', { name: 'Open task' }).click();
+  await expect(mechanic.getByRole('heading', { name: 'Procedure' })).toBeVisible();
+  await expect(mechanic.getByText('Compression test, version 1')).toBeVisible();
+  const steps = mechanic.getByRole('region', { name: 'Procedure' }).getByRole('listitem');
+  await expect(steps.first()).toContainText('The engine maker’s manual comes first');
+  await expect(steps.filter({ hasText: 'Compression, cranked until the gauge stands still' })).toContainText(
+    'as found, in psi · for each cylinder',
+  );
+  await expectAccessible(mechanic);
+});
+
+test('a rebuild says that needle and seat are touched only where the pop-off test failed or the needle did not hold', async ({
+  browser,
+  shared,
+}) => {
+  const hand = await pageOf(browser, shared, 'dock');
+  await hand.goto('/procedures');
+  await hand.getByRole('link', { name: 'Carburettor rebuild' }).click();
+  const steps = hand.getByRole('region', { name: 'Steps' }).getByRole('listitem');
+  const numberOf = async (text: string) =>
+    (await steps.allTextContents()).findIndex((step) => step.includes(text)) + 1;
+  const popOff = await numberOf('Pop-off test, wet, before anything is opened');
+  const holds = await numberOf('The needle holds pressure');
+  await expect(steps.filter({ hasText: 'Inlet needle, seat and spring renewed' })).toContainText(
+    `Only where step ${popOff} failed or step ${holds} failed.`,
+  );
+});
