@@ -133,5 +133,7 @@ export const taskProcedure = z.object({
 export type CreateProcedure = z.output<typeof createProcedure>;
 export type ChangeProcedure = z.output<typeof changeProcedure>;
 export type Procedure = z.output<typeof procedure>;
+/** What the form of a procedure is drawn from. */
+export type ProcedureFormData = { procedure: Procedure | null; specNames: string[] };
 export type ProcedureLine = z.output<typeof procedureLine>;
 export type TaskProcedure = z.output<typeof taskProcedure>;

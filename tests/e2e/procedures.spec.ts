@@ -48,3 +48,41 @@ test('a rebuild says that needle and seat are touched only where the pop-off tes
     `Only where step ${popOff} failed or step ${holds} failed.`,
   );
 });
+
+test('a mechanic writes a procedure with the keyboard at hand, is told what is wrong, and writes its next version', async ({
+  browser,
+  fresh,
+}) => {
+  test.setTimeout(120_000);
+  const page = await pageOf(browser, fresh, 'mechanic', 820);
+  await page.goto('/procedures');
+  await page.getByRole('link', { name: 'Write a procedure' }).click();
+  await page.getByLabel('Name').fill('Leak test');
+  await page.getByRole('button', { name: 'Save the procedure' }).click();
+  await expect(page.getByRole('alert')).toContainText('Steps: has no step');
+
+  await page.getByRole('button', { name: 'Add a step' }).click();
+  const first = page.getByRole('group', { name: /^1/ });
+  await first.getByLabel('What is done').fill('Holds 5 psi for a minute');
+  await first.getByLabel('How often').selectOption('For each carburettor');
+  await page.getByRole('button', { name: 'Add a step' }).click();
+  const second = page.getByRole('group', { name: /^2/ });
+  await second.getByRole('button', { name: /only where an earlier step/ }).click();
+  await page.getByRole('button', { name: 'Save the procedure' }).click();
+  await expect(page.getByRole('alert')).toContainText('Step 2: is empty');
+  await second.getByLabel('What is done').fill('Renew the gasket');
+  await expectAccessible(page);
+  await page.getByRole('button', { name: 'Save the procedure' }).click();
+  await expect(page.getByRole('heading', { name: 'Leak test', level: 1 })).toBeVisible();
+  await expect(page.getByText('Only where step 1 failed.')).toBeVisible();
+
+  await page.getByRole('link', { name: 'Change' }).click();
+  await page.getByLabel('What is new in this version').fill('Say so first');
+  await page.getByRole('button', { name: 'Move Renew the gasket up' }).click();
+  await page.getByRole('button', { name: 'Save the procedure' }).click();
+  await expect(page.getByRole('alert')).toContainText('depends on a step that does not come before it');
+  await page.getByRole('button', { name: 'Move Renew the gasket down' }).click();
+  await page.getByRole('button', { name: 'Save the procedure' }).click();
+  await expect(page.getByText('Version 2', { exact: true })).toBeVisible();
+  await expect(page.getByText('Say so first')).toBeVisible();
+});

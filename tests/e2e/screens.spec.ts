@@ -18,7 +18,7 @@ const FOR_ANYBODY = ['/sign-in', '/forgot', '/reset/nonsense', '/invitation/nons
 type Rows = Awaited<ReturnType<typeof listRows>>;
 const manager = (rows: Rows) => [
   ...['/board', '/availability', '/units', '/calendar', '/calendar?view=list', '/tasks', '/account'],
-  ...['/review', '/digest', '/docks', '/models', '/people', '/rules', '/procedures'],
+  ...['/review', '/digest', '/docks', '/models', '/people', '/rules', '/procedures', '/procedures/new'],
   ...['/units/new', '/docks/new', '/models/new', '/rules/new', '/tasks/new'],
   ...[
     `/units/${rows.ready}`,
@@ -33,6 +33,7 @@ const manager = (rows: Rows) => [
     `/docks/${rows.dock}`,
     `/models/${rows.model}`,
     `/procedures/${rows.procedure}`,
+    `/procedures/${rows.procedure}/edit`,
   ],
 ];
 const mechanic = (rows: Rows) => [

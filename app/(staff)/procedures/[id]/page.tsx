@@ -6,6 +6,7 @@ import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getProcedure } from '@/lib/actions/get-procedure';
+import { mayFleetWide } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 
@@ -18,13 +19,23 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 }
 
 export default async function ProcedurePage({ params }: Props) {
+  const ctx = await pageContext();
   const procedure = await load(await pageId(params));
   return (
     <>
       <PageHeader
         kicker={`${kindWords[procedure.kind]} · version ${procedure.version}`}
         title={procedure.name}
-        actions={<LinkButton href="/procedures">All procedures</LinkButton>}
+        actions={
+          <>
+            {mayFleetWide(ctx, 'procedure.write') && !procedure.retiredAt ? (
+              <LinkButton kind="primary" href={`/procedures/${procedure.id}/edit`}>
+                Change
+              </LinkButton>
+            ) : null}
+            <LinkButton href="/procedures">All procedures</LinkButton>
+          </>
+        }
       />
       {procedure.retiredAt ? (
         <Notice tone="warn" title="Retired" still>
