@@ -121,10 +121,13 @@ test('every page there is is looked at', () => {
     ...FOR_ANYBODY,
     ...manager({ ready: id, held: id, task: id, rule: id, dock: id, model: id, procedure: id }),
   ];
-  const missed = listRoutes().filter(
-    ({ pattern }) => !looked.some((path) => pattern.test(path.split('?')[0]!)),
-  );
-  expect(missed.map(({ route }) => route).filter((route) => !WALKED_ELSEWHERE.includes(route))).toEqual([]);
+  const routes = listRoutes();
+  // '/units/new' is a page of its own, not one of '/units/[id]'.
+  const routeOf = (path: string) =>
+    (routes.find(({ route }) => route === path) ?? routes.find(({ pattern }) => pattern.test(path)))?.route;
+  const visited = new Set(looked.map((path) => routeOf(path.split('?')[0]!)));
+  const missed = routes.map(({ route }) => route).filter((route) => !visited.has(route));
+  expect(missed.filter((route) => !WALKED_ELSEWHERE.includes(route))).toEqual([]);
 });
 
 for (const [role, paths, looks] of [
