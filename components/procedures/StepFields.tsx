@@ -145,7 +145,7 @@ type Part = Pick<Props, 'step' | 'error' | 'onChange'> & { at: (field: string) =
 
 function MeasureFields({ step, at, specsId, error, onChange }: Part & { specsId: string }) {
   return (
-    <div className="grid items-start gap-4 sm:grid-cols-3">
+    <div className="grid items-end gap-4 sm:grid-cols-3">
       <TextInput
         id={at('measures.spec')}
         label="Judged by the spec"
