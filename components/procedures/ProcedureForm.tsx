@@ -2,23 +2,18 @@
 
 import { useRouter } from 'next/navigation';
 import { useId, useState, type FormEvent } from 'react';
-import { Section } from '@/components/rules/Section';
 import { useUnsavedWarning } from '@/components/rules/use-unsaved-warning';
-import { kindWords } from '@/components/task/task-words';
 import { Button } from '@/components/ui/Button';
 import { ErrorSummary } from '@/components/ui/ErrorSummary';
 import { Notice } from '@/components/ui/Notice';
-import { RadioGroup } from '@/components/ui/RadioGroup';
-import { TextInput } from '@/components/ui/TextInput';
 import { useToast } from '@/components/ui/Toast';
 import { fieldError, send, type Failure } from '@/lib/client/api';
 import { listErrors } from '@/lib/client/list-errors';
 import { useSend } from '@/lib/client/use-send';
-import { PROCEDURE_KINDS, type Procedure, type ProcedureFormData } from '@/lib/schemas/procedure';
+import type { Procedure, ProcedureFormData } from '@/lib/schemas/procedure';
 import { draftSteps, moveStep, newStep, toSteps, type StepDraft } from './procedure-draft';
+import { ProcedureName } from './ProcedureName';
 import { StepFields } from './StepFields';
-
-const KINDS = PROCEDURE_KINDS.map((value) => ({ value, label: kindWords[value] }));
 
 const LABELS: Record<string, string> = { name: 'Name', note: 'What is new', steps: 'Steps' };
 
@@ -72,43 +67,18 @@ export function ProcedureForm({ procedure, specNames }: ProcedureFormData) {
         The engine maker’s manual, local law and licensed practice come first. Put each caution at the step it
         belongs to.
       </Notice>
-      <Section title="What it is">
-        <TextInput
-          id="name"
-          label="Name"
-          maxLength={80}
-          value={name}
-          error={error('name')}
-          onChange={(event) => {
-            setName(event.target.value);
-            setChanged(true);
-          }}
-        />
-        <RadioGroup
-          name="kind"
-          label="Kind"
-          look="segmented"
-          options={KINDS}
-          value={kind}
-          error={error('kind')}
-          onChange={(event) => {
-            setKind(event.target.value as Procedure['kind']);
-            setChanged(true);
-          }}
-        />
-        {procedure ? (
-          <TextInput
-            id="note"
-            label="What is new in this version"
-            hint="Tasks that are open keep the version they were opened with."
-            optional
-            maxLength={500}
-            value={note}
-            error={error('note')}
-            onChange={(event) => setNote(event.target.value)}
-          />
-        ) : null}
-      </Section>
+      <ProcedureName
+        name={name}
+        kind={kind}
+        note={procedure ? note : null}
+        error={error}
+        onChange={(part) => {
+          if (part.name !== undefined) setName(part.name);
+          if (part.kind !== undefined) setKind(part.kind);
+          if (part.note !== undefined) setNote(part.note);
+          setChanged(true);
+        }}
+      />
       <datalist id={specsId}>
         {specNames.map((spec) => (
           <option key={spec} value={spec} />
