@@ -1,7 +1,9 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePointColumns } from '@/lib/domain/duty-standing';
-import type { Step } from '@/lib/domain/procedure';
+import type { ClosedResult, ClosedSignOff } from '@/lib/domain/closed-work';
+import type { Judgement, Specs } from '@/lib/domain/measurement';
+import type { EntryValue, Stage, Step } from '@/lib/domain/procedure';
 import type { Lead, Labour, PartNeed, Scope, Trigger, Window } from '@/lib/domain/rule';
 
 /** An instant: read as a Date, written as a Date. */
@@ -39,7 +41,7 @@ export interface ModelTable {
   engines: number;
   cylinders: number;
   carb_count: number;
-  specs: DefaultJson<Record<string, unknown>>;
+  specs: DefaultJson<Specs>;
   created_at: DefaultInstant;
 }
 
@@ -127,6 +129,7 @@ export interface UnitTable {
   registration: string | null;
   entered_service_on: CalendarDay;
   carb_count_override: number | null;
+  specs: DefaultJson<Specs>;
   created_at: DefaultInstant;
   created_by: string | null;
   retired_at: MaybeInstant;
@@ -196,6 +199,8 @@ export interface RuleTable {
   labour: Json<Labour>;
   parts: DefaultJson<PartNeed[]>;
   procedure_id: string | null;
+  wants_second_person: Generated<boolean>;
+  wants_test_ride: Generated<boolean>;
   revision: Generated<number>;
   created_at: DefaultInstant;
   created_by: string | null;
@@ -249,6 +254,7 @@ export interface DefectTable {
   reported_at: Instant;
   reported_by: string | null;
   reading_id: string | null;
+  step_entry_id: string | null;
   cleared_at: MaybeInstant;
   cleared_by: string | null;
   clear_note: string | null;
@@ -276,6 +282,11 @@ export interface TaskTable {
   rule_id: string | null;
   defect_id: string | null;
   procedure_version_id: string | null;
+  only_per: 'engine' | 'cylinder' | 'carb' | null;
+  only_place: number | null;
+  step_entry_id: string | null;
+  wants_second_person: Generated<boolean>;
+  wants_test_ride: Generated<boolean>;
   planned_on: CalendarDay | null;
   planned_at: MaybeInstant;
   planned_by: string | null;
@@ -298,6 +309,44 @@ export interface TaskNoteTable {
   written_by: string | null;
 }
 
+export interface StepEntryTable {
+  id: Generated<string>;
+  seq: ColumnType<number, never, never>;
+  task_id: string;
+  unit_id: string;
+  step_key: string;
+  place: number;
+  stage: Stage | null;
+  value: Json<EntryValue>;
+  /** Of a measurement: the spec it was judged by, and how. */
+  spec: string | null;
+  judged: JSONColumnType<Judgement | null, string | null, never>;
+  engine_hours_tenths: number;
+  follows_id: string | null;
+  entered_at: Instant;
+  entered_by: string | null;
+  recorded_at: Instant;
+}
+
+export interface TaskPresenceTable {
+  task_id: string;
+  person_id: string;
+  seen_at: Instant;
+}
+
+export interface SignOffTable {
+  id: string;
+  task_id: string;
+  kind: 'second_person' | 'test_ride';
+  note: string | null;
+  /** The latest entry there was when it was signed; 0 before the first. */
+  last_entry_seq: number;
+  signed_at: Instant;
+  signed_by: string;
+  withdrawn_at: MaybeInstant;
+  withdrawn_by: string | null;
+}
+
 export interface ClosureTable {
   id: Generated<string>;
   task_id: string;
@@ -309,7 +358,8 @@ export interface ClosureTable {
   outings: number;
   minutes: number | null;
   note: string | null;
-  results: DefaultJson<unknown[]>;
+  results: DefaultJson<ClosedResult[]>;
+  sign_offs: DefaultJson<ClosedSignOff[]>;
   parts_used: DefaultJson<unknown[]>;
   held_since_at: MaybeInstant;
   closed_by: string | null;
@@ -400,6 +450,9 @@ export interface DB {
   lay_up: LayUpTable;
   task: TaskTable;
   task_note: TaskNoteTable;
+  step_entry: StepEntryTable;
+  task_presence: TaskPresenceTable;
+  sign_off: SignOffTable;
   closure: ClosureTable;
   baseline: BaselineTable;
   digest: DigestTable;

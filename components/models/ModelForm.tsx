@@ -8,13 +8,13 @@ import { ErrorSummary } from '@/components/ui/ErrorSummary';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { TextInput } from '@/components/ui/TextInput';
 import { useToast } from '@/components/ui/Toast';
-import { fieldError, send, type Failure } from '@/lib/client/api';
+import { fieldError, refusedHere, send } from '@/lib/client/api';
 import { numberOf, textOf } from '@/lib/client/form-values';
 import { listErrors } from '@/lib/client/list-errors';
 import { useSend } from '@/lib/client/use-send';
 import type { Model } from '@/lib/schemas/model';
 import { EngineFields } from './EngineFields';
-import { draftSpecs, readSpecs, specPath, type SpecDraft } from './spec-draft';
+import { draftSpecs, readSpecs, showSpecs, specLabels, type SpecDraft } from './spec-draft';
 import { SpecRows } from './SpecRows';
 
 const LABELS = {
@@ -53,10 +53,7 @@ export function ModelForm({ model, mayWrite }: { model: Model | null; mayWrite: 
     router.refresh();
   }
 
-  const shown: Failure | null = failure && {
-    ...failure,
-    errors: failure.errors.map((each) => ({ ...each, path: specPath(each.path, rows) })),
-  };
+  const shown = showSpecs(failure, rows);
   const error = (path: string) => fieldError(shown, path);
   return (
     <form noValidate className="grid max-w-4xl gap-8" onSubmit={(event) => void submit(event)}>
@@ -104,20 +101,6 @@ export function ModelForm({ model, mayWrite }: { model: Model | null; mayWrite: 
         </div>
       ) : null}
     </form>
-  );
-}
-
-/** What the form itself refuses, in the shape of the API's refusals. */
-function refusedHere(errors: Failure['errors']): Failure {
-  return { ok: false, code: 'invalid_input', detail: errors.map(({ message }) => message).join(' '), errors };
-}
-
-/** Each field of a spec by the measurement's name. */
-function specLabels(rows: readonly SpecDraft[]): Record<string, string> {
-  return Object.fromEntries(
-    rows.flatMap(({ key, name }) =>
-      ['name', 'min', 'target', 'max', 'unit'].map((field) => [`spec.${key}.${field}`, name || 'Spec']),
-    ),
   );
 }
 

@@ -84,3 +84,21 @@ export function specPath(path: string, rows: readonly SpecDraft[]): string {
   const field = path.slice(`specs.${row.name.trim()}.`.length);
   return `spec.${row.key}.${field.split('.')[0] || 'name'}`;
 }
+
+/** A refusal with each field of a spec at the row it is typed in. */
+export function showSpecs(failure: Failure | null, rows: readonly SpecDraft[]): Failure | null {
+  if (!failure) return null;
+  return {
+    ...failure,
+    errors: failure.errors.map((each) => ({ ...each, path: specPath(each.path, rows) })),
+  };
+}
+
+/** Each field of a spec by the measurement's name. */
+export function specLabels(rows: readonly SpecDraft[]): Record<string, string> {
+  return Object.fromEntries(
+    rows.flatMap(({ key, name }) =>
+      ['name', 'min', 'target', 'max', 'unit'].map((field) => [`spec.${key}.${field}`, name || 'Spec']),
+    ),
+  );
+}

@@ -1,6 +1,13 @@
 import { Notice } from '@/components/ui/Notice';
 import type { Step } from '@/lib/domain/procedure';
-import { describeMeasures, describeOnFail, describeWhen, perWords, stepKindWords } from './step-words';
+import {
+  describeMeasures,
+  describeOnFail,
+  describeRetest,
+  describeWhen,
+  perWords,
+  stepKindWords,
+} from './step-words';
 
 /** A procedure as it lies on the bench: its steps in order, each caution at the step it belongs to. */
 export function BenchSheet({ steps }: { steps: readonly Step[] }) {
@@ -35,12 +42,14 @@ function StepText({ step, steps }: { step: Step; steps: readonly Step[] }) {
     step.required ? null : 'if wanted',
   ].filter((fact) => fact !== null);
   const when = describeWhen(step, steps);
+  const retest = describeRetest(step, steps);
   const onFail = describeOnFail(step);
   return (
     <>
       <h3 className="text-lg">{step.title}</h3>
       <p className="text-ink-soft">{facts.join(' · ')}</p>
       {when ? <p className="font-semibold">{when}</p> : null}
+      {retest ? <p className="font-semibold">{retest}</p> : null}
       {step.detail ? <p className="max-w-prose">{step.detail}</p> : null}
       {step.caution ? (
         <Notice tone="warn" still>

@@ -136,6 +136,9 @@ export function StepFields({
           />
         </>
       )}
+      {canDecide(step) ? (
+        <RetestField step={step} at={at} earlier={earlier} error={error} onChange={onChange} />
+      ) : null}
       {canDecide(step) ? <FailFields step={step} at={at} error={error} onChange={onChange} /> : null}
     </fieldset>
   );
@@ -173,6 +176,28 @@ function MeasureFields({ step, at, specsId, error, onChange }: Part & { specsId:
         onChange={(event) => onChange({ stages: event.target.value as StepDraft['stages'] })}
       />
     </div>
+  );
+}
+
+function RetestField({ step, at, earlier, error, onChange }: Part & Pick<Props, 'earlier'>) {
+  const alike = earlier.filter((other) => canDecide(other) && other.per === step.per);
+  if (alike.length === 0 && step.retests === null) return null;
+  return (
+    <Select
+      id={at('retests')}
+      label="Tests again, after the work"
+      optional
+      placeholder="No earlier step"
+      options={alike.map((other) => ({
+        value: String(other.row),
+        label: other.title || 'Without a name',
+      }))}
+      value={step.retests === null ? '' : String(step.retests)}
+      error={error(at('retests'))}
+      onChange={(event) =>
+        onChange({ retests: event.target.value === '' ? null : Number(event.target.value) })
+      }
+    />
   );
 }
 

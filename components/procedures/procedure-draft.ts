@@ -16,6 +16,8 @@ export type StepDraft = {
   unit: MeasuredUnit;
   stages: 'found' | 'left' | 'both';
   when: { row: number; outcome: 'pass' | 'fail' }[];
+  /** The earlier step that this one tests again, by row. */
+  retests: number | null;
   opens: 'nothing' | 'defect' | 'task';
   failTitle: string;
   failHolds: boolean;
@@ -26,7 +28,7 @@ export type StepDraft = {
 export function newStep(row: number): StepDraft {
   return {
     ...{ row, key: '', kind: 'check', title: '', detail: '', caution: '', per: 'unit', required: true },
-    ...{ spec: '', unit: 'psi', stages: 'both', when: [] },
+    ...{ spec: '', unit: 'psi', stages: 'both', when: [], retests: null },
     ...{ opens: 'nothing', failTitle: '', failHolds: true, failRest: {} },
   };
 }
@@ -51,6 +53,7 @@ export function draftSteps(steps: readonly Step[]): StepDraft[] {
       row: steps.findIndex((other) => other.key === key),
       outcome,
     })),
+    ...(step.retests && { retests: steps.findIndex((other) => other.key === step.retests) }),
     ...(step.onFail && {
       opens: step.onFail.open,
       failTitle: step.onFail.title,
@@ -83,6 +86,7 @@ export function toSteps(drafts: readonly StepDraft[]) {
       ...(draft.when.length > 0 && {
         when: draft.when.map(({ row, outcome }) => ({ step: keys.get(row) ?? 'gone', outcome })),
       }),
+      ...(decides && draft.retests !== null && { retests: keys.get(draft.retests) ?? 'gone' }),
       ...(decides &&
         draft.opens !== 'nothing' && {
           onFail: {

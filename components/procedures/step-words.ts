@@ -41,3 +41,9 @@ export function describeOnFail({ onFail }: Step): string | null {
   const what = onFail.open === 'task' ? 'a task' : 'a defect';
   return `If it fails: ${what}, “${onFail.title}”${onFail.holdsUnit ? ', that holds the unit' : ''}.`;
 }
+
+/** What an earlier step found, this one tests again: 'Tests step 4 again.'; null for one that does not. */
+export function describeRetest({ retests }: Step, steps: readonly Step[]): string | null {
+  if (!retests) return null;
+  return `Tests step ${steps.findIndex((step) => step.key === retests) + 1} again, after the work.`;
+}

@@ -6,6 +6,7 @@ import type { UnitTable } from '@/db/tables';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import { personIdOf } from '@/lib/domain/access';
+import { mergeSpecs, type Specs } from '@/lib/domain/measurement';
 import { describeMoment } from '@/lib/domain/moment-words';
 import { refuseField } from '@/lib/errors';
 import type { ChangeUnit, Unit } from '@/lib/schemas/unit';
@@ -19,7 +20,7 @@ import { toUnit } from './shape-unit';
  * Changes what is named of a unit, or retires it for good. What decides which rules are for it, or when they are
  * first due, has it assessed again. Managers of its dock, and of the one it goes to.
  * Throws `not_found`, `forbidden`, `conflict` on `id` for a retired unit, on `fleetNumber` or `hin` when another unit
- * has it; `unit_out` on `retired` or `dockId` while it is out; `invalid_input` on `hin` or `registration`.
+ * has it; `unit_out` on `retired` or `dockId` while it is out; `invalid_input` on `hin`, `registration` or `specs`.
  */
 export async function changeUnit(ctx: Context, id: string, input: ChangeUnit): Promise<Unit> {
   return refusingTaken(UNIT_TAKEN, () =>
@@ -43,8 +44,9 @@ type Change = Updateable<UnitTable>;
 
 async function toChange(ctx: Context, before: Checked<UnitRow>, input: ChangeUnit): Promise<Change> {
   const dock = await accessDock(ctx, input.dockId ?? before.dock_id, 'unit.write');
-  if (input.modelId && !(await findModel(ctx.db, input.modelId)))
-    throw refuseField('modelId', 'is no model of this fleet', 'not_found');
+  const model = await findModel(ctx.db, input.modelId ?? before.model_id);
+  if (!model) throw refuseField('modelId', 'is no model of this fleet', 'not_found');
+  if (input.specs) checkSpecs(mergeSpecs(model.specs, input.specs));
   const numbers = {
     hin: input.hin === undefined ? before.hin : input.hin,
     registration: input.registration === undefined ? before.registration : input.registration,
@@ -57,8 +59,19 @@ async function toChange(ctx: Context, before: Checked<UnitRow>, input: ChangeUni
     ...(input.modelId !== undefined && { model_id: input.modelId }),
     ...(input.enteredServiceOn !== undefined && { entered_service_on: input.enteredServiceOn }),
     ...(input.carbCount !== undefined && { carb_count_override: input.carbCount }),
+    ...(input.specs && { specs: JSON.stringify(input.specs) }),
     ...(input.retired && { retired_at: ctx.now, retired_by: personIdOf(ctx.actor) }),
   };
+}
+
+/** Limits of a unit's own must fit those that it keeps of its model. */
+function checkSpecs(merged: Specs): void {
+  for (const [name, { min, max }] of Object.entries(merged))
+    if (min !== undefined && max !== undefined && max < min)
+      throw refuseField(
+        `specs.${name}.max`,
+        `with those of its model: the most, ${max}, is below the least, ${min}`,
+      );
 }
 
 async function refuseOut(ctx: Context, unit: UnitRow, path: string): Promise<void> {

@@ -19,14 +19,16 @@ import { assessAgain, enqueueRefresh } from './assess-again';
 import { computeClosingMeter, type ClosingMeter } from './closing-meter';
 import { settleInstant } from './keep-reading';
 import { refuseEnded } from './refuse-ended';
+import { settleBench } from './settle-bench';
 import { toClosure } from './shape-closure';
 
 /**
- * Closes a task: the record that the work was done, at what engine hours and outing count. Clears the defect the
- * task comes from; the worker then moves the due points. `at` is now unless given; engine hours are what the meter
- * showed then unless given, and when they are above the live meter they are a reading too.
+ * Closes a task: the record that the work was done, at what engine hours and outing count, with the results that
+ * stand at the bench. Clears the defect the task comes from; the worker then moves the due points. `at` is now unless
+ * given; engine hours are what the meter showed then unless given, and when they are above the live meter they are a
+ * reading too. `results` are recorded on the way.
  * Throws `conflict` when the task has ended, saying by whom and when; `unit_out` while the unit is out; on `at` and
- * `engineHours` what cannot be; `reason_needed` on `note` for an unusual run.
+ * `engineHours` what cannot be; `reason_needed` on `note` for an unusual run; what `settleBench` throws.
  */
 export async function closeTask(ctx: Context, id: string, input: CloseTask): Promise<Closure> {
   const seen = await accessTask(ctx, id, 'closure.write');
@@ -42,6 +44,7 @@ export async function closeTask(ctx: Context, id: string, input: CloseTask): Pro
     if (task.rule_id) await checkAgainstLast(trx, { ...seen, rule_id: task.rule_id }, at, closedOn, meter);
     const heldSince = await findHeldSince(trx, task, at);
     const by = personIdOf(ctx.actor);
+    const bench = await settleBench(ctx, trx, id, input.results ?? []);
     if (meter.reading)
       await insertClosureReading(trx, { ...meter.reading, recorded_at: ctx.now, recorded_by: by });
     const closure = await insertClosure(trx, {
@@ -54,6 +57,8 @@ export async function closeTask(ctx: Context, id: string, input: CloseTask): Pro
       outings: meter.outings,
       minutes: input.minutes ?? null,
       note: input.note || null,
+      results: JSON.stringify(bench.results),
+      sign_offs: JSON.stringify(bench.signOffs),
       held_since_at: heldSince && heldSince < at ? heldSince : null,
       closed_by: by,
       recorded_at: ctx.now,

@@ -17,6 +17,7 @@ export function toClosure(row: ClosureRow): Closure {
     minutes: row.minutes,
     note: row.note,
     results: row.results,
+    signOffs: row.sign_offs,
     partsUsed: row.parts_used,
     heldSince: row.held_since_at?.toISOString() ?? null,
     closedBy: toNamed(row.closed_by, row.closer_name),

@@ -16,6 +16,8 @@ export function toRule(row: NamedRuleRow, unitCount: number): Rule {
     labour: row.labour,
     parts: row.parts,
     procedureId: row.procedure_id,
+    wantsSecondPerson: row.wants_second_person,
+    wantsTestRide: row.wants_test_ride,
     revision: row.revision,
     unitCount,
     createdAt: row.created_at.toISOString(),
@@ -41,5 +43,7 @@ export function fromRule(input: CreateRule) {
     labour: JSON.stringify(input.labour),
     parts: JSON.stringify(input.parts),
     procedure_id: input.procedureId ?? null,
+    wants_second_person: input.wantsSecondPerson,
+    wants_test_ride: input.wantsTestRide,
   } satisfies Omit<Insertable<RuleTable>, 'created_by'>;
 }

@@ -18,6 +18,7 @@ export function toUnit(row: UnitRow): Unit {
     engineHours: toHours(row.engine_hours_tenths),
     outings: row.outing_count,
     carbCount: row.carb_count,
+    specs: row.specs as Unit['specs'],
     readAt: row.read_at.toISOString(),
     retiredAt: row.retired_at?.toISOString() ?? null,
   };

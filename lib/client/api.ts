@@ -76,3 +76,8 @@ export function formError(failure: Failure | null, fields: readonly string[]): s
   if (failure.errors.length === 0) return failure.detail;
   return elsewhere.length > 0 ? elsewhere.map((error) => error.message).join('; ') : undefined;
 }
+
+/** What a form itself refuses, in the shape of the API's refusals. */
+export function refusedHere(errors: Failure['errors']): Failure {
+  return { ok: false, code: 'invalid_input', detail: errors.map(({ message }) => message).join(' '), errors };
+}

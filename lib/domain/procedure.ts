@@ -25,6 +25,8 @@ export type Step = {
   measures?: { spec: string; unit: MeasuredUnit; stages: Stage[] } | undefined;
   /** Done only where any of these earlier steps came out like this. */
   when?: Condition[] | undefined;
+  /** The earlier step that this one tests again after the work: it then says how that one stands at last. */
+  retests?: string | undefined;
   /** What a failing step opens, for that place alone. */
   onFail?:
     | {

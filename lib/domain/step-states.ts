@@ -173,22 +173,36 @@ function settleMeasurement(stages: readonly Stage[], found: Judgement | null, le
   return { outcome, last, done: settled };
 }
 
-/** What one step measures as found another may measure as left: then that says how it stands at last. */
+/**
+ * How a step stands at last may be said by a later one: one that tests it again, or one that measures as left what it
+ * measured as found.
+ */
 function settleByLater(state: StepState, states: readonly StepState[]): StepState {
-  const { measures } = state.step;
-  if (!measures || measures.stages.includes('left')) return state;
-  const later = states.filter(
-    ({ step }) => step.measures?.spec === measures.spec && step.per === state.step.per,
-  );
+  const { step } = state;
+  const later = states.filter((other) => other.step.per === step.per && saysLast(other.step, step));
+  if (later.length === 0) return state;
   return {
     ...state,
     places: state.places.map((one) => {
-      const left = later
+      const last = later
         .flatMap(({ places }) => places)
-        .findLast(({ place, leftJudgement }) => place === one.place && leftJudgement !== null)?.leftJudgement;
-      return left ? { ...one, last: passes(left) ?? one.last } : one;
+        .findLast(
+          ({ place, applies, last }) => place === one.place && applies === 'yes' && last !== null,
+        )?.last;
+      return last ? { ...one, last } : one;
     }),
   };
+}
+
+function saysLast(later: Step, step: Step): boolean {
+  if (later.retests === step.key) return true;
+  const { measures } = step;
+  return (
+    measures !== undefined &&
+    !measures.stages.includes('left') &&
+    later.measures?.spec === measures.spec &&
+    later.measures.stages.includes('left')
+  );
 }
 
 function settleEntry(entry: EntryValue | null): Pick<PlaceState, 'outcome' | 'last' | 'done'> {

@@ -41,7 +41,7 @@ const spec = z
   });
 
 /** By the measurement's name: `{"Compression": {"min": 150, "max": 180, "unit": "psi"}}`. */
-const specs = z
+export const specs = z
   .record(line(60), spec, 'give specs by name')
   .refine((value) => Object.keys(value).length <= 60, 'has more than 60 specs');
 

@@ -1,6 +1,15 @@
 import { idParams, listOf } from './common';
 import type { Operation } from './operation';
 import { changeProcedure, createProcedure, procedure, procedureLine } from './procedure';
+import {
+  openFollowUp,
+  presentList,
+  recordEntry,
+  recordedEntry,
+  signOffParams,
+  signOffTask,
+  work,
+} from './work';
 
 /** Procedures: what is done at the bench, step by step. */
 export const WORKSHOP_OPERATIONS: readonly Operation[] = [
@@ -53,5 +62,68 @@ export const WORKSHOP_OPERATIONS: readonly Operation[] = [
     params: idParams,
     status: 200,
     answer: procedure,
+  },
+  {
+    id: 'getWork',
+    method: 'GET',
+    path: '/tasks/{id}/work',
+    tag: 'Workshop',
+    summary: 'A task at the bench: its steps, what was entered, who is at it and who signed',
+    params: idParams,
+    status: 200,
+    answer: work,
+  },
+  {
+    id: 'recordEntry',
+    method: 'POST',
+    path: '/tasks/{id}/entries',
+    tag: 'Workshop',
+    summary: 'Record the result of one step',
+    params: idParams,
+    body: recordEntry,
+    status: 201,
+    answer: recordedEntry,
+  },
+  {
+    id: 'seeAtTask',
+    method: 'POST',
+    path: '/tasks/{id}/presence',
+    tag: 'Workshop',
+    summary: 'Say that one is at the task now',
+    params: idParams,
+    status: 200,
+    answer: presentList,
+  },
+  {
+    id: 'openFollowUp',
+    method: 'POST',
+    path: '/tasks/{id}/follow-ups',
+    tag: 'Workshop',
+    summary: 'Open what a failed step calls for',
+    params: idParams,
+    body: openFollowUp,
+    status: 201,
+    answer: work,
+  },
+  {
+    id: 'signOffTask',
+    method: 'POST',
+    path: '/tasks/{id}/sign-offs',
+    tag: 'Workshop',
+    summary: 'Sign as the second person, or for a test ride',
+    params: idParams,
+    body: signOffTask,
+    status: 201,
+    answer: work,
+  },
+  {
+    id: 'withdrawSignOff',
+    method: 'DELETE',
+    path: '/tasks/{id}/sign-offs/{signOffId}',
+    tag: 'Workshop',
+    summary: 'Take a signature back',
+    params: signOffParams,
+    status: 200,
+    answer: work,
   },
 ];

@@ -37,6 +37,7 @@ const step = z
       .min(1, 'names no step')
       .max(5, 'names more than 5 steps')
       .optional(),
+    retests: key.optional(),
     onFail: z
       .strictObject({
         open: z.enum(['task', 'defect'], 'is task or defect'),
@@ -47,10 +48,12 @@ const step = z
       })
       .optional(),
   })
-  .superRefine(({ kind, measures, onFail }, ctx) => {
+  .superRefine(({ kind, measures, retests, onFail }, ctx) => {
     const say = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });
     if (kind === 'measurement' && !measures) say('measures', 'say what is measured');
     if (kind !== 'measurement' && measures) say('measures', 'belongs to a measurement');
+    if (retests && kind !== 'check' && kind !== 'measurement')
+      say('retests', 'belongs to a check or a measurement');
     if (onFail && kind !== 'check' && kind !== 'measurement')
       say('onFail', 'belongs to a check or a measurement');
   });
@@ -61,11 +64,18 @@ const steps = z
   .min(1, 'has no step')
   .max(120, 'has more than 120 steps')
   .superRefine((list, ctx) =>
-    list.forEach(({ key: own, when }, index) => {
+    list.forEach(({ key: own, per, when, retests }, index) => {
       const say = (path: string, message: string) =>
         ctx.addIssue({ code: 'custom', path: [index, path], message });
       const earlier = list.slice(0, index);
       if (earlier.some((other) => other.key === own)) say('key', 'is the key of an earlier step');
+      if (retests !== undefined) {
+        const again = earlier.find((other) => other.key === retests);
+        if (!again) say('retests', 'names a step that does not come before it');
+        else if (again.kind !== 'check' && again.kind !== 'measurement')
+          say('retests', 'names a step that neither passes nor fails');
+        else if (again.per !== per) say('retests', 'names a step that is done for something else');
+      }
       for (const condition of when ?? []) {
         const on = earlier.find((other) => other.key === condition.step);
         if (!on) say('when', 'depends on a step that does not come before it');

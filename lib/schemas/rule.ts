@@ -83,6 +83,9 @@ const fields = {
   labour: labour.default({ baseMinutes: 0, perCarbMinutes: 0, perEngineMinutes: 0 }),
   parts: parts.default([]),
   procedureId: id.nullable().optional(),
+  /** Asked for at closing: a signature of somebody who did none of the work, and one for a test ride. */
+  wantsSecondPerson: z.boolean('say true or false').default(false),
+  wantsTestRide: z.boolean('say true or false').default(false),
 };
 
 /** The part of a rule that says when it is due. */

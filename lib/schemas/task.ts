@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { URGENCIES } from '@/lib/domain/urgency';
 import { taskProcedure } from './procedure';
+import { closedResult, closedSignOff, closingResult } from './work';
 import { day, hours, id, instant, line, pageQuery, text } from './common';
 
 export const TASK_KINDS = ['inspection', 'service', 'rebuild', 'repair'] as const;
@@ -131,7 +132,7 @@ export const taskNote = z.object({ id, text: z.string(), writtenAt: z.string(), 
 export const closeTask = z.strictObject({
   at: instant.optional(),
   engineHours: hours.optional(),
-  results: z.array(z.unknown()).max(0, 'this task has no procedure to give results for').optional(),
+  results: z.array(closingResult).max(2000, 'are at most 2,000').optional(),
   partsUsed: z.array(z.unknown()).max(0, 'no parts are kept here to be used').optional(),
   minutes: z
     .int('give whole minutes')
@@ -154,7 +155,8 @@ export const closure = z.object({
   outings: z.int(),
   minutes: z.int().nullable(),
   note: z.string().nullable(),
-  results: z.array(z.unknown()),
+  results: z.array(closedResult),
+  signOffs: z.array(closedSignOff),
   partsUsed: z.array(z.unknown()),
   heldSince: z.string().nullable(),
   closedBy: named,

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { count, day, hours, id, line, pageQuery } from './common';
+import { specs } from './model';
 
 const carbCount = z.int('give a whole number').min(0, 'cannot be below 0').max(16, 'cannot be above 16');
 
@@ -25,6 +26,8 @@ export const changeUnit = z
     registration: line(20).nullable(),
     enteredServiceOn: day,
     carbCount: carbCount.nullable(),
+    /** Limits of its own, in place of its model's by name and, within a name, by field; the whole of them. */
+    specs,
     retired: z.literal(true, 'a unit is retired for good: send true or leave it out'),
   })
   .partial()
@@ -48,6 +51,7 @@ export const unit = z.object({
   engineHours: z.number(),
   outings: z.int(),
   carbCount: z.int(),
+  specs,
   readAt: z.string(),
   retiredAt: z.string().nullable(),
 });

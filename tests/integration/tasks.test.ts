@@ -416,7 +416,8 @@ describe('closing', () => {
     ['engineHours', { engineHours: 52.55 }, 422],
     ['minutes', { minutes: -5 }, 422],
     ['minutes', { minutes: 1.5 }, 422],
-    ['results', { results: [{ step: 1 }] }, 422],
+    ['results', { results: 'all fine' }, 422],
+    ['results', { results: [{ stepKey: 'look', value: { kind: 'check', outcome: 'pass' } }] }, 422],
     ['partsUsed', { partsUsed: [{ part: 1 }] }, 422],
     ['note', { note: 5 }, 422],
   ])('with a wrong %s is refused by name and closes nothing (%j)', async (field, fields, status) => {

@@ -47,6 +47,12 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
     post('/readings', { id: randomUUID(), unitId: unit, hours, at: minutesAgo(60).toISOString(), ...more });
   const procedure = (name: string) =>
     post('/procedures', { name, kind: 'service', steps: [{ key: 'look', kind: 'check', title: 'Look' }] });
+  const flush = (await procedure('Flush')).id;
+  const bench = await post('/tasks', { ...repair, title: 'Flush it', procedureId: flush });
+  const look = { id: randomUUID(), stepKey: 'look', value: { kind: 'check', outcome: 'fail' } };
+  await post(`/tasks/${bench.id}/entries`, look);
+  const signOffId = randomUUID();
+  await post(`/tasks/${bench.id}/sign-offs`, { id: signOffId, kind: 'test_ride' });
   const outingUnit = await addUnit('N-5');
   await refreshDue(asSystem(database.db, new Date()), { unitIds: [outingUnit.id] });
   return {
@@ -78,7 +84,9 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
       await post('/invitations', { name: 'Ada Reef', email: 'ada@wakewright.example', role: 'dock' })
     ).id,
     apiKeyId: (await post('/api-keys', { name: 'The till' })).id,
-    procedureId: (await procedure('Flush')).id,
+    procedureId: flush,
+    benchTaskId: bench.id,
+    signOffId,
     spareProcedureId: (await procedure('Flush twice')).id,
     personId: hand.personId,
   };

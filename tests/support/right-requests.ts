@@ -195,11 +195,13 @@ function ofWork(world: World): Record<string, RightRequest> {
   };
 }
 
-function ofWorkshop({ procedureId, spareProcedureId }: World): Record<string, RightRequest> {
+function ofWorkshop(world: World): Record<string, RightRequest> {
   const steps = [
     { key: 'test', kind: 'check', title: 'It holds', per: 'carb', required: true },
     { key: 'mend', kind: 'note', title: 'What was done', when: [{ step: 'test', outcome: 'fail' }] },
   ];
+  const { procedureId, spareProcedureId, signOffId } = world;
+  const bench = { id: world.benchTaskId };
   const procedure = { name: 'Leak test', kind: 'inspection', steps, note: 'First go' };
   return {
     listProcedures: { roles: EVERYONE },
@@ -212,6 +214,27 @@ function ofWorkshop({ procedureId, spareProcedureId }: World): Record<string, Ri
       ...refused,
     },
     retireProcedure: { params: { id: spareProcedureId }, roles: WORKSHOP, ...refused },
+    getWork: { params: bench, roles: EVERYONE, ...refused },
+    recordEntry: {
+      params: bench,
+      body: { id: randomUUID(), stepKey: 'look', place: 0, value: { kind: 'check', outcome: 'fail' } },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    seeAtTask: { params: bench, roles: WORKSHOP, ...refused },
+    openFollowUp: {
+      params: bench,
+      body: { id: randomUUID(), stepKey: 'look', place: 0 },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    signOffTask: {
+      params: { id: world.openTaskId },
+      body: { id: randomUUID(), kind: 'second_person', note: 'All of it looked at' },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    withdrawSignOff: { params: { ...bench, signOffId }, roles: WORKSHOP, ...refused },
   };
 }
 

@@ -54,6 +54,8 @@ test('what is left out of a rule is 0, scheduled, holding the unit and without p
     holdsUnit: true,
     labour: { baseMinutes: 0, perCarbMinutes: 0, perEngineMinutes: 0 },
     parts: [],
+    wantsSecondPerson: false,
+    wantsTestRide: false,
   });
 });
 

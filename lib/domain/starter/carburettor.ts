@@ -16,18 +16,33 @@ const fails = {
   ],
 };
 
+/** Of the carburettor that failed alone. */
+const REBUILD_IT = {
+  open: 'task' as const,
+  kind: 'rebuild' as const,
+  title: 'Carburettor rebuild',
+  holdsUnit: true,
+};
+
 /** The test that decides whether needle, seat, lever and spring are touched at all. */
 const POP_OFF = measure('pop-off', 'Pop-off test, wet', ['Pop-off pressure', 'psi', ['found', 'left']], {
   per: 'carb',
   detail:
     'Wet the seat with a little fuel. Raise the pressure slowly until the needle lifts, and read it. Do it two or three times: all runs must agree.',
   caution: PRESSURE,
-  onFail: { open: 'defect', title: 'Carburettor fails the pop-off test', holdsUnit: true },
+  onFail: REBUILD_IT,
 });
 const HOLDS = check('needle-holds', 'The needle holds pressure', {
   per: 'carb',
   detail: 'Below the pop-off pressure, wet: the gauge stands still for ten seconds.',
   onFail: { open: 'defect', title: 'Inlet needle does not hold', holdsUnit: true },
+});
+const HOLDS_NOW = check('needle-holds-now', 'The needle holds pressure now', {
+  per: 'carb',
+  ...fails,
+  retests: 'needle-holds',
+  detail: 'As before, with the new needle and seat.',
+  onFail: REBUILD_IT,
 });
 const SCREWS = [
   check('screw-heads', 'Mixture screws have whole heads and points', {
@@ -144,8 +159,10 @@ const REBUILD: StarterProcedure = {
         per: 'carb',
         detail: 'Two or three runs that agree.',
         caution: PRESSURE,
+        onFail: REBUILD_IT,
       },
     ),
+    HOLDS_NOW,
     ...SCREWS.slice(1).map((step) => ({
       ...step,
       measures: { ...step.measures!, stages: ['left' as const] },
@@ -157,6 +174,11 @@ const REBUILD: StarterProcedure = {
     }),
     note('found', 'What was found, for whoever opens it next', { per: 'carb' }),
   ],
+  follows: {
+    'pop-off': 'Carburettor rebuild',
+    'pop-off-closed': 'Carburettor rebuild',
+    'needle-holds-now': 'Carburettor rebuild',
+  },
 };
 
 const POP_OFF_TEST: StarterProcedure = {
@@ -173,7 +195,9 @@ const POP_OFF_TEST: StarterProcedure = {
       detail:
         'Only where the test failed or the needle did not hold; else they are left alone. Then test again: that is as left.',
     }),
+    HOLDS_NOW,
   ],
+  follows: { 'pop-off': 'Carburettor rebuild', 'needle-holds-now': 'Carburettor rebuild' },
 };
 
 const MIXTURE: StarterProcedure = {

@@ -2,9 +2,15 @@ import type { MeasuredUnit } from '../measured-value';
 import type { Per, Stage, Step, TaskKind } from '../procedure';
 
 /** A procedure that every operator begins with, to be changed to fit its craft and its makers' manuals. */
-export type StarterProcedure = { name: string; kind: TaskKind; steps: Step[] };
+export type StarterProcedure = {
+  name: string;
+  kind: TaskKind;
+  steps: Step[];
+  /** By the key of a step whose failing opens a task: the name of the starter procedure which that task follows. */
+  follows?: Readonly<Record<string, string>>;
+};
 
-type More = Partial<Pick<Step, 'detail' | 'caution' | 'per' | 'required' | 'when' | 'onFail'>>;
+type More = Partial<Pick<Step, 'detail' | 'caution' | 'per' | 'required' | 'when' | 'retests' | 'onFail'>>;
 
 /** Passes, fails or does not apply. */
 export function check(key: string, title: string, more: More = {}): Step {

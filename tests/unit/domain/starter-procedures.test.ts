@@ -29,8 +29,12 @@ test('there is one for each job of the trade, under a name of its own', () => {
 
 test.each(STARTER_PROCEDURES.map((procedure) => [procedure.name, procedure] as const))(
   '%s is a procedure that a person could have written, and puts the maker’s manual first',
-  (_, procedure) => {
+  (_, { follows = {}, ...procedure }) => {
     expect(createProcedure.parse(procedure)).toEqual(procedure);
+    for (const [key, name] of Object.entries(follows)) {
+      expect(procedure.steps.find((step) => step.key === key)?.onFail?.open).toBe('task');
+      expect(stepsOf(name).length).toBeGreaterThan(0);
+    }
     expect(procedure.steps[0]).toMatchObject({
       kind: 'caution',
       title: expect.stringMatching(/manual comes first/) as string,

@@ -1,0 +1,61 @@
+import { sql, type Insertable, type Kysely } from 'kysely';
+import type { DB, StepEntryTable } from '../tables';
+
+/** An entry with the name of who made it. */
+export type StepEntryRow = Awaited<ReturnType<typeof listStepEntries>>[number];
+
+function selectEntries(db: Kysely<DB>) {
+  return db
+    .selectFrom('step_entry as e')
+    .leftJoin('person as author', 'author.id', 'e.entered_by')
+    .selectAll('e')
+    .select('author.name as author_name');
+}
+
+/** All that was entered on a task, in the order it came in. */
+export function listStepEntries(db: Kysely<DB>, taskId: string) {
+  return selectEntries(db).where('e.task_id', '=', taskId).orderBy('e.seq').execute();
+}
+
+/** The entry of this id, on whatever task. */
+export function findStepEntry(db: Kysely<DB>, id: string) {
+  return selectEntries(db).where('e.id', '=', id).executeTakeFirst();
+}
+
+/** Adds entries in this order. */
+export async function insertStepEntries(
+  db: Kysely<DB>,
+  rows: readonly Insertable<StepEntryTable>[],
+): Promise<void> {
+  if (rows.length > 0)
+    await db
+      .insertInto('step_entry')
+      .values([...rows])
+      .execute();
+}
+
+/** What a unit's steps measured as they now stand, by spec, place and stage: the latest of each on each task. */
+export async function listMeasured(db: Kysely<DB>, unitId: string) {
+  const { rows } = await sql<{
+    task_id: string;
+    step_key: string;
+    spec: string;
+    place: number;
+    stage: 'found' | 'left';
+    value: StepEntryRow['value'];
+    judged: StepEntryRow['judged'];
+    engine_hours_tenths: number;
+    entered_at: Date;
+  }>`
+    select * from (
+      select distinct on (e.task_id, e.step_key, e.place, e.stage)
+             e.task_id, e.step_key, e.spec, e.place, e.stage, e.value, e.judged, e.engine_hours_tenths,
+             e.entered_at, e.seq
+        from step_entry e
+       where e.unit_id = ${unitId} and e.stage is not null
+       order by e.task_id, e.step_key, e.place, e.stage, e.seq desc
+    ) latest
+     where value->>'kind' = 'measurement' and spec is not null
+     order by engine_hours_tenths, seq`.execute(db);
+  return rows;
+}
