@@ -13,8 +13,9 @@ import { startOfLocalDay, type CalendarDay } from '@/lib/domain/calendar-day';
 import { computeState, type DuePoint, type DueState, type Standing } from '@/lib/domain/due';
 import type { CreateCheckIn } from '@/lib/schemas/check-in';
 import type { Rule } from '@/lib/schemas/rule';
+import { findAllInOrder } from './findings';
 import type { Crew } from './people';
-import type { Chance } from './random';
+import { chanceOf, type Chance } from './random';
 
 export type OpenWork = { id: string; ruleId: string | null; defectId: string | null };
 export type Watched = { rule: Rule; point: DuePoint };
@@ -100,7 +101,9 @@ export function isOverdue(book: Book, today: CalendarDay): boolean {
 export async function close(book: Book, work: Pick<OpenWork, 'id'>, now: Date): Promise<void> {
   const { chance, crew } = book;
   const note = chance.happens(0.3) ? chance.pick(NOTES) : undefined;
-  await closeTask(as(book, crew.mechanic, now), work.id, {
+  const ctx = as(book, crew.mechanic, now);
+  await closeTask(ctx, work.id, {
+    results: await findAllInOrder(ctx, work.id, chanceOf(`${book.fleetNumber} at ${now.toISOString()}`)),
     minutes: chance.whole(3, 24) * 5,
     ...(note && { note }),
   });

@@ -40,9 +40,13 @@ export type WorkFacts = {
 
 /** Where each step stands at each of its places, in the order of the procedure. */
 export function computeSteps({ steps, counts, specs, entries, only = null }: WorkFacts): StepState[] {
+  const latest = new Map(entries.map(({ value, ...at }) => [spotOf(at), value]));
   const states: StepState[] = [];
   for (const step of steps) {
-    const at = (place: number, stage: Stage | null) => findValue(entries, step.key, place, stage);
+    const at = (place: number, stage: Stage | null) => {
+      const value = latest.get(spotOf({ stepKey: step.key, place, stage }));
+      return value && value.kind !== 'cleared' ? value : null;
+    };
     const places = listPlaces(step.per, counts, only);
     const judged = step.measures
       ? {
@@ -134,12 +138,7 @@ function meets(
     : 'no';
 }
 
-function findValue(entries: readonly StepEntry[], stepKey: string, place: number, stage: Stage | null) {
-  const entry = entries.findLast(
-    (one) => one.stepKey === stepKey && one.place === place && one.stage === stage,
-  );
-  return entry && entry.value.kind !== 'cleared' ? entry.value : null;
-}
+const spotOf = ({ stepKey, place, stage }: Omit<StepEntry, 'value'>) => `${stepKey} ${place} ${stage ?? ''}`;
 
 function judgeStage(
   step: Step,
