@@ -1,4 +1,4 @@
-import { sql, type Insertable, type Kysely } from 'kysely';
+import type { Insertable, Kysely } from 'kysely';
 import type { DB, StepEntryTable } from '../tables';
 
 /** An entry with the name of who made it. */
@@ -32,30 +32,4 @@ export async function insertStepEntries(
       .insertInto('step_entry')
       .values([...rows])
       .execute();
-}
-
-/** What a unit's steps measured as they now stand, by spec, place and stage: the latest of each on each task. */
-export async function listMeasured(db: Kysely<DB>, unitId: string) {
-  const { rows } = await sql<{
-    task_id: string;
-    step_key: string;
-    spec: string;
-    place: number;
-    stage: 'found' | 'left';
-    value: StepEntryRow['value'];
-    judged: StepEntryRow['judged'];
-    engine_hours_tenths: number;
-    entered_at: Date;
-  }>`
-    select * from (
-      select distinct on (e.task_id, e.step_key, e.place, e.stage)
-             e.task_id, e.step_key, e.spec, e.place, e.stage, e.value, e.judged, e.engine_hours_tenths,
-             e.entered_at, e.seq
-        from step_entry e
-       where e.unit_id = ${unitId} and e.stage is not null
-       order by e.task_id, e.step_key, e.place, e.stage, e.seq desc
-    ) latest
-     where value->>'kind' = 'measurement' and spec is not null
-     order by engine_hours_tenths, seq`.execute(db);
-  return rows;
 }
