@@ -16,7 +16,7 @@ const SERVER_PACKAGES = [
   'smtp-server',
   'mailparser',
 ];
-const EDGES = ['auth', 'http', 'client', 'mail', 'storage', 'launch'];
+const EDGES = ['auth', 'http', 'client', 'mail', 'papers', 'storage', 'launch'];
 
 /** An edge takes what it needs from the inside of the house, but nothing of the other edges. */
 const edge = (name, also = []) => ({
@@ -37,7 +37,7 @@ const HOUSE = [
   {
     name: 'app/api',
     from: '^app/api/',
-    to: ['^app/api/', '^lib/(actions|http|schemas)/', '^lib/auth/', npm('next', 'next-auth', 'zod')],
+    to: ['^app/api/', '^lib/(actions|http|papers|schemas)/', '^lib/auth/', npm('next', 'next-auth', 'zod')],
   },
   {
     name: 'app pages',
@@ -88,6 +88,7 @@ const HOUSE = [
   edge('auth'),
   edge('http', ['^lib/auth/(actor|next-auth)\\.ts$']),
   edge('mail'),
+  edge('papers'),
   edge('storage'),
   // The launcher runs the local mailbox; nothing else of the product takes from tests.
   edge('launch', ['^tests/fakes/']),

@@ -26,6 +26,14 @@ export function ClosureList({
             {closure.minutes === null ? null : `, ${minutesText(closure.minutes)} of work`}.
           </p>
           {closure.note ? <p className="whitespace-pre-line text-ink-soft">{closure.note}</p> : null}
+          <p className="no-print">
+            <a
+              className="link inline-flex min-h-target items-center"
+              href={`/api/v1/closures/${closure.id}/record.pdf`}
+            >
+              Service record (PDF)
+            </a>
+          </p>
           {closure.reversedAt ? (
             <p className="font-semibold">
               Reversed by {closure.reversedBy?.name ?? 'the system'}: {closure.reverseReason}

@@ -124,6 +124,7 @@ function describeOperation(operation: Operation, describe: Describe): Json {
 
 function describeAnswer({ answer, summary }: Operation, describe: Describe): Json {
   if (answer === null) return { description: 'Done' };
+  if (answer === 'pdf') return { description: summary, content: { 'application/pdf': {} } };
   if (answer === 'html') return { description: summary, content: { 'text/html': {} } };
   return { description: summary, content: { 'application/json': { schema: describe(answer, 'output') } } };
 }

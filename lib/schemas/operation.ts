@@ -13,6 +13,6 @@ export type Operation = {
   query?: z.ZodType;
   body?: z.ZodType;
   status: number;
-  /** Null for an answer without a body, `html` for a page. */
-  answer: z.ZodType | 'html' | null;
+  /** Null for an answer without a body, `html` for a page, `pdf` for a paper. */
+  answer: z.ZodType | 'html' | 'pdf' | null;
 };

@@ -126,4 +126,14 @@ export const WORKSHOP_OPERATIONS: readonly Operation[] = [
     status: 200,
     answer: work,
   },
+  {
+    id: 'getServiceRecord',
+    method: 'GET',
+    path: '/closures/{id}/record.pdf',
+    tag: 'Workshop',
+    summary: 'A closure as a paper to be kept',
+    params: idParams,
+    status: 200,
+    answer: 'pdf',
+  },
 ];

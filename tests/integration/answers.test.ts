@@ -39,7 +39,7 @@ test('every right request is answered with the status and the shape that the API
     expect(got.status, said).toBe(status);
     if (answer === null) expect(got.body, said).toBeNull();
     // Parsed, it has lost every field that the schema does not name: an answer must have had none.
-    else if (answer !== 'html') expect(answer.parse(got.body), said).toEqual(got.body);
+    else if (answer !== 'html' && answer !== 'pdf') expect(answer.parse(got.body), said).toEqual(got.body);
   }
 });
 

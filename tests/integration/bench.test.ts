@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { extractText, getDocumentProxy } from 'unpdf';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { changeModel } from '@/lib/actions/change-model';
 import type { Closure, TaskPage } from '@/lib/schemas/task';
@@ -333,5 +334,41 @@ describe('signatures that a rule asks for', () => {
     expect((await mechanic.send<Work>('DELETE', path)).body.signOffs).toEqual([]);
     const unknown = `/tasks/${taskId}/sign-offs/${randomUUID()}`;
     expect((await manager.send('DELETE', unknown)).status).toBe(404);
+  });
+});
+
+describe('the service record', () => {
+  async function readRecord(closureId: string): Promise<{ type: string | null; text: string }> {
+    const response = await api.get(`/closures/${closureId}/record.pdf`, mechanic);
+    const pdf = await getDocumentProxy(new Uint8Array(await response.arrayBuffer()));
+    const { text } = await extractText(pdf, { mergePages: true });
+    return { type: response.headers.get('content-type'), text: text.replaceAll(/\s+/g, ' ') };
+  }
+
+  test('says what was found and left, with limits, hours and people; reversed, it says so first', async () => {
+    await enter(popOff(1, 'found', '25', '25'));
+    await enter(popOff(2, 'found', '15', '15'));
+    await enter(check('needle', 2, 'pass'));
+    await enter(popOff(2, 'left', '26', '26'));
+    await enter({ ...check('air', 0, 'pass') });
+    const { body } = await close({ minutes: 95, note: 'Kit fitted.' });
+    const { type, text } = await readRecord(body.id);
+    expect(type).toBe('application/pdf');
+    for (const part of [
+      'Service record: It floods',
+      'N-1, Twin of Cais Norte',
+      '100.0 h',
+      'carburettor 2, as found: 15 psi, 15 psi – OUT OF LIMITS (21 psi to 37 psi, 2 runs',
+      'carburettor 2, as left: 26 psi, 26 psi – within limits',
+      'carburettor 2: pass',
+      '95 min',
+      'Kit fitted.',
+      'by mechanic',
+      'The engine maker’s manual, local law and licensed practice come before anything written here.',
+    ])
+      expect(text).toContain(part);
+    expect(text).not.toContain('REVERSED');
+    await manager.send('POST', `/closures/${body.id}/reversal`, { reason: 'Wrong craft.' });
+    expect((await readRecord(body.id)).text).toMatch(/REVERSED on .* by manager: Wrong craft\./);
   });
 });

@@ -71,6 +71,8 @@ async function answer(routes: Route[], incoming: IncomingMessage, outgoing: Serv
 export function testApi(database: { url: string }): {
   caller(role: Role, options?: { dockIds?: string[]; name?: string; signedIn?: boolean }): Promise<Caller>;
   nobody: Pick<Caller, 'send'>;
+  /** What a path answers, as it comes: for what is not JSON. */
+  get(path: string, by: Caller): Promise<Response>;
 } {
   const routes = listRoutes();
   const server = createServer((incoming, outgoing) => {
@@ -106,6 +108,7 @@ export function testApi(database: { url: string }): {
     };
   return {
     nobody: { send: sendAs({}) },
+    get: (to, { key }) => fetch(`${baseUrl}/api/v1${to}`, { headers: { authorization: `Bearer ${key}` } }),
     caller: async (role, { dockIds = [], name = role, signedIn = false } = {}) => {
       const { personId, key } = await addPerson(role, dockIds, name);
       if (signedIn) return { personId, key, name, send: sendAs({ cookie: await signInHere(personId) }) };
