@@ -77,8 +77,9 @@ function Place({ state: { step, places }, place }: { state: StepState; place: Pl
   const alone = places.length === 1 && place.place === 0;
   const when = describeWhen(step, work.steps);
   return (
-    <section
+    <div
       id={spotId(step.key, place.place)}
+      role="group"
       tabIndex={-1}
       aria-label={name || step.title}
       className={
@@ -96,7 +97,7 @@ function Place({ state: { step, places }, place }: { state: StepState; place: Pl
           {place.applies === 'waits' ? `Waits. ${when ?? ''}` : `Leave alone. ${when ?? ''}`}
         </p>
       )}
-    </section>
+    </div>
   );
 }
 

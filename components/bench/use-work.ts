@@ -42,17 +42,7 @@ export type BenchWork = {
 export function useWork(initial: Work, me: { id: string; name: string }, mayWork: boolean): BenchWork {
   const path = `/api/v1/tasks/${initial.taskId}`;
   const { data: work, failure, ask } = usePolled<Work>(`${path}/work`, { everyMs: LOOK_MS, initial, keyOf });
-  const [overtaken, setOvertaken] = useState<Overtaken[]>([]);
-  const [arrived, setArrived] = useState<Entry[]>([]);
-  const sent = useCallback(
-    ({ id }: KeptEntry, answer: unknown) => {
-      const { entry, overtook } = answer as RecordedEntry;
-      setArrived((list) => [...list, entry]);
-      if (overtook) setOvertaken((list) => [...list, { id, overtook }]);
-      void ask();
-    },
-    [ask],
-  );
+  const { arrived, overtaken, sent } = useArrivals(ask);
   const { kept, ready, drain } = useOutbox(`task:${initial.taskId}`, me.id, sent);
   usePresence(`${path}/presence`, mayWork && work.endedAt === null);
 
@@ -102,6 +92,22 @@ export function useWork(initial: Work, me: { id: string; name: string }, mayWork
     discard: ({ order }) => void discardEntry(order),
     sendNow: drain,
   };
+}
+
+/** What the server took of this device's entries, until the next look at the task shows it. */
+function useArrivals(ask: () => Promise<void>) {
+  const [overtaken, setOvertaken] = useState<Overtaken[]>([]);
+  const [arrived, setArrived] = useState<Entry[]>([]);
+  const sent = useCallback(
+    ({ id }: KeptEntry, answer: unknown) => {
+      const { entry, overtook } = answer as RecordedEntry;
+      setArrived((list) => [...list, entry]);
+      if (overtook) setOvertaken((list) => [...list, { id, overtook }]);
+      void ask();
+    },
+    [ask],
+  );
+  return { arrived, overtaken, sent };
 }
 
 function findFaults(work: Work, states: StepState[], closerId: string): ClosingFault[] {

@@ -1,4 +1,5 @@
 import { idParams, listOf } from './common';
+import { measurements } from './measurements';
 import type { Operation } from './operation';
 import { changeProcedure, createProcedure, procedure, procedureLine } from './procedure';
 import {
@@ -135,5 +136,15 @@ export const WORKSHOP_OPERATIONS: readonly Operation[] = [
     params: idParams,
     status: 200,
     answer: 'pdf',
+  },
+  {
+    id: 'listMeasurements',
+    method: 'GET',
+    path: '/units/{id}/measurements',
+    tag: 'Workshop',
+    summary: 'What was measured on a unit over its engine hours, with limits and trends',
+    params: idParams,
+    status: 200,
+    answer: measurements,
   },
 ];

@@ -234,6 +234,7 @@ function ofWorkshop(world: World): Record<string, RightRequest> {
       roles: WORKSHOP,
       ...refused,
     },
+    listMeasurements: { params: { id: world.unitId }, roles: EVERYONE, ...refused },
     getServiceRecord: { params: { id: world.closureId }, roles: EVERYONE, ...refused },
     withdrawSignOff: { params: { ...bench, signOffId }, roles: WORKSHOP, ...refused },
   };

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { cache } from 'react';
+import { UnitMeasurements } from '@/components/measurements/UnitMeasurements';
 import { UnitActions } from '@/components/units/UnitActions';
 import { UnitDuties } from '@/components/units/UnitDuties';
 import { UnitFacts } from '@/components/units/UnitFacts';
@@ -9,6 +10,7 @@ import { UnitStanding } from '@/components/units/UnitStanding';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
+import { listMeasurements } from '@/lib/actions/list-measurements';
 import { openUnit } from '@/lib/actions/open-unit';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
@@ -35,6 +37,7 @@ export async function generateMetadata(props: Props): Promise<Metadata> {
 export default async function UnitPage(props: Props) {
   const page = await loadFrom(props);
   const { unit, duties, may } = page;
+  const measurements = await listMeasurements(await pageContext(), unit.id);
   return (
     <>
       <PageHeader
@@ -63,6 +66,7 @@ export default async function UnitPage(props: Props) {
           <h2 className="text-2xl">About the unit</h2>
           <UnitFacts unit={unit} />
         </section>
+        <UnitMeasurements measurements={measurements} />
         <UnitHistory page={page} />
       </div>
     </>
