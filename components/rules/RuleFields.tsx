@@ -58,18 +58,7 @@ export function RuleFields({
           disabled={readOnly}
           onChange={(event) => change('kind', { kind: event.target.value as RuleDraft['kind'] })}
         />
-        <Select
-          label="Procedure"
-          optional
-          id="procedureId"
-          hint="The steps that its tasks follow."
-          placeholder="None"
-          options={data.procedures.map(({ id, name }) => ({ value: id, label: name }))}
-          value={draft.procedureId}
-          disabled={readOnly}
-          error={errorOf('procedureId')}
-          onChange={(event) => change('procedureId', { procedureId: event.target.value })}
-        />
+        <WorkFields form={form} procedures={data.procedures} />
       </Section>
       <Section
         title="How often"
@@ -115,6 +104,46 @@ export function RuleFields({
       <Section title="How long the work takes">
         <LabourFields form={form} labour={labourOf(draft)} />
       </Section>
+    </>
+  );
+}
+
+/** What the work follows, and who signs for it. */
+function WorkFields({
+  form: { draft, change, errorOf, readOnly },
+  procedures,
+}: {
+  form: ReturnType<typeof useRuleForm>['form'];
+  procedures: RuleFormData['procedures'];
+}) {
+  return (
+    <>
+      <Select
+        label="Procedure"
+        optional
+        id="procedureId"
+        hint="The steps that its tasks follow."
+        placeholder="None"
+        options={procedures.map(({ id, name }) => ({ value: id, label: name }))}
+        value={draft.procedureId}
+        disabled={readOnly}
+        error={errorOf('procedureId')}
+        onChange={(event) => change('procedureId', { procedureId: event.target.value })}
+      />
+      <Checkbox
+        label="A second person looks at the work and signs before it is closed"
+        id="wantsSecondPerson"
+        checked={draft.wantsSecondPerson}
+        disabled={readOnly}
+        onChange={(event) => change('wantsSecondPerson', { wantsSecondPerson: event.target.checked })}
+      />
+      <Checkbox
+        label="A test ride is signed for before it is closed"
+        id="wantsTestRide"
+        checked={draft.wantsTestRide}
+        disabled={readOnly}
+        onChange={(event) => change('wantsTestRide', { wantsTestRide: event.target.checked })}
+      />
     </>
   );
 }

@@ -46,6 +46,8 @@ export type RuleDraft = {
   holdsUnit: boolean;
   /** Empty for none. */
   procedureId: string;
+  wantsSecondPerson: boolean;
+  wantsTestRide: boolean;
 };
 
 export function newTrigger(key: number, on: TriggerShape['on'], today: CalendarDay): TriggerDraft {
@@ -67,6 +69,8 @@ export function newDraft(today: CalendarDay): RuleDraft {
     carbMax: '',
     holdsUnit: true,
     procedureId: '',
+    wantsSecondPerson: false,
+    wantsTestRide: false,
   };
 }
 
@@ -93,6 +97,8 @@ export function draftOf(rule: Rule, today: CalendarDay): RuleDraft {
     carbMax: String(appliesTo.carbCount?.max ?? ''),
     holdsUnit: rule.holdsUnit,
     procedureId: rule.procedureId ?? '',
+    wantsSecondPerson: rule.wantsSecondPerson,
+    wantsTestRide: rule.wantsTestRide,
   };
 }
 
@@ -130,6 +136,8 @@ export function toInput(draft: RuleDraft) {
     },
     holdsUnit: draft.holdsUnit,
     ...(draft.procedureId && { procedureId: draft.procedureId }),
+    wantsSecondPerson: draft.wantsSecondPerson,
+    wantsTestRide: draft.wantsTestRide,
     labour: {
       baseMinutes: amount('baseMinutes'),
       perCarbMinutes: amount('perCarbMinutes'),

@@ -56,19 +56,20 @@ export async function lockProcedure(trx: Transaction<DB>, id: string): Promise<v
 
 export type VersionRow = {
   version: number;
+  steps: Selectable<ProcedureVersionTable>['steps'];
   note: string | null;
   written_at: Date;
   written_by: string | null;
   writer_name: string | null;
 };
 
-/** Who wrote each version of a procedure, the latest first. */
+/** Each version of a procedure with who wrote it, the latest first. */
 export function listProcedureVersions(db: Kysely<DB>, procedureId: string): Promise<VersionRow[]> {
   return db
     .selectFrom('procedure_version as v')
     .leftJoin('person as writer', 'writer.id', 'v.written_by')
     .where('v.procedure_id', '=', procedureId)
-    .select(['v.version', 'v.note', 'v.written_at', 'v.written_by', 'writer.name as writer_name'])
+    .select(['v.version', 'v.steps', 'v.note', 'v.written_at', 'v.written_by', 'writer.name as writer_name'])
     .orderBy('v.version', 'desc')
     .execute();
 }

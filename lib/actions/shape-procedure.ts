@@ -1,4 +1,5 @@
 import type { ProcedureRow, VersionRow } from '@/db/queries/procedures';
+import { describeChanges } from '@/lib/domain/procedure-changes';
 import type { Procedure, ProcedureLine } from '@/lib/schemas/procedure';
 import { toNamed } from './shape-task';
 
@@ -10,9 +11,10 @@ export function toProcedure(row: ProcedureRow, versions: readonly VersionRow[]):
     kind: row.kind,
     version: row.version,
     steps: row.steps,
-    versions: versions.map((version) => ({
+    versions: versions.map((version, index) => ({
       version: version.version,
       note: version.note,
+      changes: describeChanges(versions[index + 1]?.steps ?? version.steps, version.steps),
       writtenAt: version.written_at.toISOString(),
       writtenBy: toNamed(version.written_by, version.writer_name),
     })),

@@ -18,6 +18,8 @@ export type PlaceState = {
   outcome: 'pass' | 'fail' | null;
   /** How it stands at last, which decides whether the work may be closed. */
   last: 'pass' | 'fail' | null;
+  /** The later step that says how it stands at last, once it does. */
+  settledBy: string | null;
   done: boolean;
 };
 export type StepState = { step: Step; places: PlaceState[] };
@@ -66,6 +68,7 @@ export function computeSteps({ steps, counts, specs, entries, only = null }: Wor
           ...entered,
           foundJudgement,
           leftJudgement,
+          settledBy: null,
           ...(step.measures
             ? settleMeasurement(step.measures.stages, foundJudgement, leftJudgement)
             : settleEntry(entered.entry)),
@@ -95,11 +98,14 @@ export function findMissing(states: readonly StepState[]): MissingResult[] {
   );
 }
 
-/** Steps that have failed and stand as failed: what a rule that holds the unit must not be closed over. */
+/**
+ * Steps that have failed and stand as failed: what a rule that holds the unit must not be closed over. Where a later
+ * step says how one stands, the failure is that one's.
+ */
 export function findOpenFailures(states: readonly StepState[]): { step: Step; place: number }[] {
   return states.flatMap(({ step, places }) =>
     places
-      .filter(({ applies, last }) => applies === 'yes' && last === 'fail')
+      .filter(({ applies, last, settledBy }) => applies === 'yes' && last === 'fail' && settledBy === null)
       .map(({ place }) => ({ step, place })),
   );
 }

@@ -105,6 +105,8 @@ const who = z.object({ id, name: z.string() }).nullable();
 export const procedureVersion = z.object({
   version: z.int(),
   note: z.string().nullable(),
+  /** What it has that the version before had not, in words; empty for the first. */
+  changes: z.array(z.string()),
   writtenAt: z.string(),
   writtenBy: who,
 });

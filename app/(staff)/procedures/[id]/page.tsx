@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { cache } from 'react';
 import { BenchSheet } from '@/components/procedures/BenchSheet';
+import { RetireProcedure } from '@/components/procedures/RetireProcedure';
 import { kindWords } from '@/components/task/task-words';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
@@ -29,9 +30,12 @@ export default async function ProcedurePage({ params }: Props) {
         actions={
           <>
             {mayFleetWide(ctx, 'procedure.write') && !procedure.retiredAt ? (
-              <LinkButton kind="primary" href={`/procedures/${procedure.id}/edit`}>
-                Change
-              </LinkButton>
+              <>
+                <LinkButton kind="primary" href={`/procedures/${procedure.id}/edit`}>
+                  Change
+                </LinkButton>
+                <RetireProcedure procedure={procedure} />
+              </>
             ) : null}
             <LinkButton href="/procedures">All procedures</LinkButton>
           </>
@@ -52,10 +56,22 @@ export default async function ProcedurePage({ params }: Props) {
           </h2>
           <p className="mb-3 text-ink-soft">The latest first; none is ever edited.</p>
           <ol className="grid">
-            {procedure.versions.map(({ version, note, writtenAt, writtenBy }) => (
+            {procedure.versions.map(({ version, note, changes, writtenAt, writtenBy }) => (
               <li key={version} className="grid gap-1 border-t border-hairline py-3">
                 <strong>Version {version}</strong>
                 {note ? <span>{note}</span> : null}
+                {changes.length > 0 ? (
+                  <details>
+                    <summary className="inline-flex min-h-target cursor-pointer items-center text-line underline underline-offset-4">
+                      What changed ({changes.length})
+                    </summary>
+                    <ul className="grid gap-1">
+                      {changes.map((change) => (
+                        <li key={change}>{change}</li>
+                      ))}
+                    </ul>
+                  </details>
+                ) : null}
                 <span className="text-ink-soft">
                   {writtenBy?.name ?? 'Shipped with Wakewright'},{' '}
                   <time dateTime={writtenAt}>{writtenAt.slice(0, 10)}</time>
