@@ -25,3 +25,15 @@ export type ClosedSignOff = {
   signedAt: string;
   signedBy: { id: string; name: string };
 };
+
+/** What a closing took out of stock, with the words that the part and the dock had then. */
+export type ClosedPart = {
+  partId: string;
+  number: string;
+  name: string;
+  quantity: number;
+  dockId: string;
+  dockName: string;
+  /** Why it was taken although the stock said otherwise. */
+  reason: string | null;
+};

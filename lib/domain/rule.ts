@@ -70,18 +70,3 @@ export function ruleApplies(scope: Scope, unit: ScopedUnit): boolean {
 export function computeMinutes(labour: Labour, unit: Pick<UnitCounts, 'carbCount' | 'engines'>): number {
   return labour.baseMinutes + labour.perCarbMinutes * unit.carbCount + labour.perEngineMinutes * unit.engines;
 }
-
-/** How many of each part the work on one unit takes, a part named twice added up, needs of none left out. */
-export function computePartQuantities(
-  needs: readonly PartNeed[],
-  unit: UnitCounts,
-): { partId: string; quantity: number }[] {
-  const times = { unit: 1, engine: unit.engines, cylinder: unit.cylinders, carb: unit.carbCount };
-  const quantities = new Map<string, number>();
-  for (const { partId, quantity, per } of needs) {
-    quantities.set(partId, (quantities.get(partId) ?? 0) + quantity * times[per]);
-  }
-  return [...quantities]
-    .filter(([, quantity]) => quantity > 0)
-    .map(([partId, quantity]) => ({ partId, quantity }));
-}

@@ -1,11 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import {
-  type PartNeed,
-  type ScopedUnit,
-  computeMinutes,
-  computePartQuantities,
-  ruleApplies,
-} from '@/lib/domain/rule';
+import { type ScopedUnit, computeMinutes, ruleApplies } from '@/lib/domain/rule';
 
 const twin: ScopedUnit = {
   modelId: 'twin-carb',
@@ -69,26 +63,5 @@ describe('work that grows with a unit', () => {
     [4, 2, 260],
   ])('with %s carburettors and %s engines takes %s minutes', (carbCount, engines, minutes) => {
     expect(computeMinutes(labour, { carbCount, engines })).toBe(minutes);
-  });
-
-  it('takes parts for each unit, engine, cylinder and carburettor, added up by part', () => {
-    const needs: PartNeed[] = [
-      { partId: 'carb kit', quantity: 1, per: 'carb' },
-      { partId: 'plug', quantity: 1, per: 'cylinder' },
-      { partId: 'filter', quantity: 2, per: 'engine' },
-      { partId: 'grease', quantity: 0.5, per: 'unit' },
-      { partId: 'plug', quantity: 1, per: 'unit' },
-    ];
-    expect(computePartQuantities(needs, { engines: 2, cylinders: 6, carbCount: 6 })).toEqual([
-      { partId: 'carb kit', quantity: 6 },
-      { partId: 'plug', quantity: 7 },
-      { partId: 'filter', quantity: 4 },
-      { partId: 'grease', quantity: 0.5 },
-    ]);
-  });
-
-  it('takes no carburettor kit for a unit without carburettors', () => {
-    const needs: PartNeed[] = [{ partId: 'carb kit', quantity: 1, per: 'carb' }];
-    expect(computePartQuantities(needs, { engines: 1, cylinders: 4, carbCount: 0 })).toEqual([]);
   });
 });
