@@ -1,9 +1,10 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { CalendarDay } from '@/lib/domain/calendar-day';
 import type { DuePointColumns } from '@/lib/domain/duty-standing';
-import type { ClosedResult, ClosedSignOff } from '@/lib/domain/closed-work';
+import type { ClosedPart, ClosedResult, ClosedSignOff } from '@/lib/domain/closed-work';
 import type { Judgement, Specs } from '@/lib/domain/measurement';
 import type { EntryValue, Stage, Step } from '@/lib/domain/procedure';
+import type { MoveKind } from '@/lib/domain/stock';
 import type { Lead, Labour, PartNeed, Scope, Trigger, Window } from '@/lib/domain/rule';
 
 /** An instant: read as a Date, written as a Date. */
@@ -360,13 +361,75 @@ export interface ClosureTable {
   note: string | null;
   results: DefaultJson<ClosedResult[]>;
   sign_offs: DefaultJson<ClosedSignOff[]>;
-  parts_used: DefaultJson<unknown[]>;
+  parts_used: DefaultJson<ClosedPart[]>;
   held_since_at: MaybeInstant;
   closed_by: string | null;
   recorded_at: DefaultInstant;
   reversed_at: MaybeInstant;
   reversed_by: string | null;
   reverse_reason: string | null;
+}
+
+export interface PartTable {
+  id: string;
+  number: string;
+  name: string;
+  supplier: string | null;
+  is_kit: Generated<boolean>;
+  created_at: Instant;
+  created_by: string | null;
+  retired_at: MaybeInstant;
+  retired_by: string | null;
+}
+
+export interface KitPartTable {
+  kit_id: string;
+  part_id: string;
+  quantity: number;
+}
+
+export interface ShelfTable {
+  part_id: string;
+  dock_id: string;
+  low_at: number | null;
+}
+
+export interface StockMoveTable {
+  id: Generated<string>;
+  seq: ColumnType<number, never, never>;
+  part_id: string;
+  dock_id: string;
+  /** What came in, negative for what went out. */
+  quantity: number;
+  kind: MoveKind;
+  /** Moves that were written together: two docks, a kit and its parts, what a closing took and got back. */
+  pair_id: string;
+  task_id: string | null;
+  closure_id: string | null;
+  reason: string | null;
+  moved_at: Instant;
+  moved_by: string | null;
+}
+
+export interface ReservationTable {
+  id: Generated<string>;
+  task_id: string;
+  part_id: string;
+  dock_id: string;
+  quantity: number;
+  reserved_at: Instant;
+  reserved_by: string | null;
+  released_at: MaybeInstant;
+  released_by: string | null;
+}
+
+/** How many of a part a task needs, where somebody said so. */
+export interface TaskNeedTable {
+  task_id: string;
+  part_id: string;
+  quantity: number;
+  said_at: Instant;
+  said_by: string | null;
 }
 
 export interface BaselineTable {
@@ -454,6 +517,12 @@ export interface DB {
   task_presence: TaskPresenceTable;
   sign_off: SignOffTable;
   closure: ClosureTable;
+  part: PartTable;
+  kit_part: KitPartTable;
+  shelf: ShelfTable;
+  stock_move: StockMoveTable;
+  reservation: ReservationTable;
+  task_need: TaskNeedTable;
   baseline: BaselineTable;
   digest: DigestTable;
   mail: MailTable;

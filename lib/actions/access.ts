@@ -3,6 +3,7 @@ import { findClosure, type ClosureRow } from '@/db/queries/closures';
 import { findDefect, type DefectRow } from '@/db/queries/defects';
 import { findLayUp, type LayUpRow } from '@/db/queries/lay-ups';
 import { findMeterFacts, type MeterFactsAsked } from '@/db/queries/meter-facts';
+import { findPart, type PartRow } from '@/db/queries/parts';
 import { findProcedure, type ProcedureRow } from '@/db/queries/procedures';
 import { findReading, type ReadingRow } from '@/db/queries/readings';
 import { findUnit, type UnitRow } from '@/db/queries/units';
@@ -90,6 +91,19 @@ export async function accessProcedure(
   const row = await findProcedure(ctx.db, procedureId);
   if (!row) throw refuseField(path, 'is no procedure of this fleet', 'not_found');
   return row as Checked<ProcedureRow>;
+}
+
+/** The part or kit, retired or in use. Throws `forbidden`, or `not_found` on `path`. */
+export async function accessPart(
+  ctx: Context,
+  partId: string,
+  act: FleetAct,
+  path = 'id',
+): Promise<Checked<PartRow>> {
+  requireFleetWide(ctx, act);
+  const row = await findPart(ctx.db, partId);
+  if (!row) throw refuseField(path, 'is no part of this stock', 'not_found');
+  return row as Checked<PartRow>;
 }
 
 /** The model. Throws `forbidden`, or `not_found` on `path`. */

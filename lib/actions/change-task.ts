@@ -9,10 +9,11 @@ import type { ChangeTask, TaskPage } from '@/lib/schemas/task';
 import { accessTask } from './access';
 import { checkPlannedOn } from './check-planned-on';
 import { refuseEnded } from './refuse-ended';
+import { reserveNeeds } from './reserve-needs';
 import { getTask } from './get-task';
 
 /**
- * Starts a task or takes that back, plans it on a day or on none, changes its words. Only what is named changes;
+ * Starts a task, which sets aside what it needs and is here, or takes that back, plans it on a day or on none, changes its words. Only what is named changes;
  * what is so already stays as it was. Throws `conflict` for a task that has ended, on `revision` when somebody
  * changed it since, on `started` when somebody else is at it; `invalid_input` on `plannedOn` for a day gone by and
  * on `title` for a rule's task.
@@ -34,6 +35,7 @@ export async function changeTask(ctx: Context, id: string, input: ChangeTask): P
       const { starter_name } = await getTaskStanding(trx, id);
       throw refuseField('started', `${starter_name ?? 'Somebody'} has started this already`, 'conflict');
     }
+    if (set.started_at) await reserveNeeds(ctx, trx, id);
   });
   return getTask(ctx, id);
 }

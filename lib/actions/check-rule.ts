@@ -1,5 +1,6 @@
 import { listDocks } from '@/db/queries/docks';
 import { listModels } from '@/db/queries/models';
+import { listPartsOf } from '@/db/queries/parts';
 import { findProcedure } from '@/db/queries/procedures';
 import type { Context } from '@/lib/context';
 import { Refusal, type FieldError } from '@/lib/errors';
@@ -13,10 +14,7 @@ export async function checkRule({ db }: Context, input: CreateRule): Promise<voi
   const errors: FieldError[] = [
     ...findUnknown(modelIds, models, 'appliesTo.modelIds', 'is no model of this fleet'),
     ...findUnknown(dockIds, docks, 'appliesTo.dockIds', 'is no dock of this fleet'),
-    ...input.parts.map((_, index) => ({
-      path: `parts.${index}.partId`,
-      message: 'is no part of this stock',
-    })),
+    ...(await findPartFaults(db, input.parts)),
     ...(await findProcedureFault(db, input.procedureId)),
   ];
   if (errors.length === 0) return;
@@ -25,6 +23,18 @@ export async function checkRule({ db }: Context, input: CreateRule): Promise<voi
     errors.map(({ path, message }) => `${path}: ${message}`).join('; '),
     errors,
   );
+}
+
+async function findPartFaults(db: Context['db'], parts: CreateRule['parts']): Promise<FieldError[]> {
+  if (parts.length === 0) return [];
+  const ids = parts.map(({ partId }) => partId);
+  const known = new Map((await listPartsOf(db, ids)).map((part) => [part.id, part]));
+  return ids.flatMap((id, index) => {
+    const part = known.get(id);
+    if (part && part.retired_at === null) return [];
+    const message = part ? 'is a part that is retired' : 'is no part of this stock';
+    return [{ path: `parts.${index}.partId`, message }];
+  });
 }
 
 async function findProcedureFault(db: Context['db'], id: string | null | undefined): Promise<FieldError[]> {

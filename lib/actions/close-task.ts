@@ -21,14 +21,16 @@ import { settleInstant } from './keep-reading';
 import { refuseEnded } from './refuse-ended';
 import { settleBench } from './settle-bench';
 import { toClosure } from './shape-closure';
+import { checkPartsUsed, takeParts } from './take-parts';
 
 /**
  * Closes a task: the record that the work was done, at what engine hours and outing count, with the results that
  * stand at the bench. Clears the defect the task comes from; the worker then moves the due points. `at` is now unless
  * given; engine hours are what the meter showed then unless given, and when they are above the live meter they are a
- * reading too. `results` are recorded on the way.
+ * reading too. `results` are recorded on the way, `partsUsed` taken out of stock, and what was set aside is released.
  * Throws `conflict` when the task has ended, saying by whom and when; `unit_out` while the unit is out; on `at` and
- * `engineHours` what cannot be; `reason_needed` on `note` for an unusual run; what `settleBench` throws.
+ * `engineHours` what cannot be; `reason_needed` on `note` for an unusual run; what `settleBench`
+ * and `checkPartsUsed` throw.
  */
 export async function closeTask(ctx: Context, id: string, input: CloseTask): Promise<Closure> {
   const seen = await accessTask(ctx, id, 'closure.write');
@@ -47,6 +49,11 @@ export async function closeTask(ctx: Context, id: string, input: CloseTask): Pro
     const bench = await settleBench(ctx, trx, id, input.results ?? []);
     if (meter.reading)
       await insertClosureReading(trx, { ...meter.reading, recorded_at: ctx.now, recorded_by: by });
+    const taken = await checkPartsUsed(ctx, trx, {
+      taskId: id,
+      dockId: seen.dock_id,
+      used: input.partsUsed ?? [],
+    });
     const closure = await insertClosure(trx, {
       task_id: id,
       unit_id: task.unit_id,
@@ -59,10 +66,12 @@ export async function closeTask(ctx: Context, id: string, input: CloseTask): Pro
       note: input.note || null,
       results: JSON.stringify(bench.results),
       sign_offs: JSON.stringify(bench.signOffs),
+      parts_used: JSON.stringify(taken),
       held_since_at: heldSince && heldSince < at ? heldSince : null,
       closed_by: by,
       recorded_at: ctx.now,
     });
+    await takeParts(ctx, trx, { taskId: id, closureId: closure.id, taken });
     await updateTask(trx, id, { ended_at: ctx.now });
     if (task.defect_id)
       await clearDefect(trx, task.defect_id, { at, by, note: input.note || `Closed: ${task.title}.` });

@@ -13,11 +13,12 @@ import type { Closure, ReverseClosure } from '@/lib/schemas/task';
 import { accessClosure } from './access';
 import { assessAgain } from './assess-again';
 import { toClosure } from './shape-closure';
+import { putPartsBack } from './take-parts';
 
 /**
  * Takes a closure back: it stays on record with who reversed it and why, and no longer counts. The task is open
  * again, its defect too, and the unit is held as not yet assessed until the worker has brought the due points back.
- * A reading that the closing made stays. Managers of the unit's dock only.
+ * A reading that the closing made stays; the parts it took are put back. Managers of the unit's dock only.
  * Throws `not_found`, `forbidden`, `conflict` when it is reversed already.
  */
 export async function reverseClosure(ctx: Context, id: string, { reason }: ReverseClosure): Promise<Closure> {
@@ -32,6 +33,7 @@ export async function reverseClosure(ctx: Context, id: string, { reason }: Rever
       reverse_reason: reason,
     });
     await reopenTask(ctx, trx, seen);
+    await putPartsBack(ctx, trx, { closureId: id, reason });
     await assessAgain(trx, [seen.unit_id]);
   });
   return toClosure(await getClosure(ctx.db, id));

@@ -1,4 +1,5 @@
 import { clearDefect } from '@/db/queries/defects';
+import { releaseReservations } from '@/db/queries/reservations';
 import { getTaskStanding, lockTask, updateTask, type TaskStandingRow } from '@/db/queries/tasks';
 import { lockUnits } from '@/db/queries/units';
 import { runTransaction } from '@/db/transaction';
@@ -25,6 +26,7 @@ export async function withdrawTask(ctx: Context, id: string, { reason }: Withdra
     refuseWhileDue(ctx, standing);
     const by = personIdOf(ctx.actor);
     await updateTask(trx, id, { ended_at: ctx.now, withdrawn_by: by, withdraw_reason: reason });
+    await releaseReservations(trx, { taskId: id, at: ctx.now, by });
     if (task.defect_id)
       await clearDefect(trx, task.defect_id, { at: ctx.now, by, note: `Withdrawn: ${reason}` });
   });

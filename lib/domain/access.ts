@@ -48,6 +48,8 @@ const AT_DOCK = {
   'task.write': WORKSHOP,
   'closure.write': WORKSHOP,
   'closure.reverse': MANAGER,
+  'stock.read': EVERYONE,
+  'stock.write': WORKSHOP,
   'digest.read': MANAGER,
 } as const satisfies Record<string, readonly Role[]>;
 
@@ -58,6 +60,8 @@ const FLEET_WIDE = {
   'rule.read': { roles: EVERYONE, allDocks: false },
   'procedure.read': { roles: EVERYONE, allDocks: false },
   'procedure.write': { roles: WORKSHOP, allDocks: true },
+  'part.read': { roles: EVERYONE, allDocks: false },
+  'part.write': { roles: WORKSHOP, allDocks: true },
   'rule.preview': { roles: EVERYONE, allDocks: false },
   'worker.read': { roles: EVERYONE, allDocks: false },
   'dock.write': { roles: MANAGER, allDocks: true },

@@ -2,6 +2,7 @@ import type { Operation } from './operation';
 import { DOCKSIDE_OPERATIONS } from './operations-dockside';
 import { FLEET_OPERATIONS } from './operations-fleet';
 import { OFFICE_OPERATIONS } from './operations-office';
+import { PARTS_OPERATIONS } from './operations-parts';
 import { SERVER_OPERATIONS } from './operations-server';
 import { WORK_OPERATIONS } from './operations-work';
 import { WORKSHOP_OPERATIONS } from './operations-workshop';
@@ -12,6 +13,7 @@ export const OPERATIONS: readonly Operation[] = [
   ...DOCKSIDE_OPERATIONS,
   ...WORK_OPERATIONS,
   ...WORKSHOP_OPERATIONS,
+  ...PARTS_OPERATIONS,
   ...OFFICE_OPERATIONS,
   ...SERVER_OPERATIONS,
 ];

@@ -66,7 +66,7 @@ const parts = z
   .array(
     z.strictObject({
       partId: id,
-      quantity: z.number('give a number').positive('is more than 0').max(10_000, 'is too many'),
+      quantity: z.int('give a whole number').min(1, 'is at least 1').max(10_000, 'is too many'),
       per: z.enum(['unit', 'engine', 'cylinder', 'carb']),
     }),
   )

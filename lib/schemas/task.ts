@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { URGENCIES } from '@/lib/domain/urgency';
 import { taskProcedure } from './procedure';
+import { closedPart, partUsed } from './task-parts';
 import { closedResult, closedSignOff, closingResult } from './work';
 import { day, hours, id, instant, line, pageQuery, text } from './common';
 
@@ -133,7 +134,7 @@ export const closeTask = z.strictObject({
   at: instant.optional(),
   engineHours: hours.optional(),
   results: z.array(closingResult).max(2000, 'are at most 2,000').optional(),
-  partsUsed: z.array(z.unknown()).max(0, 'no parts are kept here to be used').optional(),
+  partsUsed: z.array(partUsed).max(200, 'are at most 200').optional(),
   minutes: z
     .int('give whole minutes')
     .min(0, 'cannot be below 0')
@@ -157,7 +158,7 @@ export const closure = z.object({
   note: z.string().nullable(),
   results: z.array(closedResult),
   signOffs: z.array(closedSignOff),
-  partsUsed: z.array(z.unknown()),
+  partsUsed: z.array(closedPart),
   heldSince: z.string().nullable(),
   closedBy: named,
   reversedAt: z.string().nullable(),

@@ -418,7 +418,7 @@ describe('closing', () => {
     ['minutes', { minutes: 1.5 }, 422],
     ['results', { results: 'all fine' }, 422],
     ['results', { results: [{ stepKey: 'look', value: { kind: 'check', outcome: 'pass' } }] }, 422],
-    ['partsUsed', { partsUsed: [{ part: 1 }] }, 422],
+    ['partsUsed', { partsUsed: 'a kit' }, 422],
     ['note', { note: 5 }, 422],
   ])('with a wrong %s is refused by name and closes nothing (%j)', async (field, fields, status) => {
     const { id } = await serviceTask();

@@ -53,6 +53,13 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
   await post(`/tasks/${bench.id}/entries`, look);
   const signOffId = randomUUID();
   await post(`/tasks/${bench.id}/sign-offs`, { id: signOffId, kind: 'test_ride' });
+  const addPart = (number: string, name: string, contents?: object[]) =>
+    post('/parts', { id: randomUUID(), number, name, ...(contents && { contents }) });
+  const { id: partId } = await addPart('G-1', 'Gasket');
+  const { id: kitId } = await addPart('K-1', 'Carburettor kit', [{ partId, quantity: 1 }]);
+  await post('/stock-moves', {
+    ...{ kind: 'receive', id: randomUUID(), partId, dockId: home.dock.id, quantity: 20 },
+  });
   const outingUnit = await addUnit('N-5');
   await refreshDue(asSystem(database.db, new Date()), { unitIds: [outingUnit.id] });
   return {
@@ -87,6 +94,9 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
     procedureId: flush,
     benchTaskId: bench.id,
     signOffId,
+    partId,
+    kitId,
+    sparePartId: (await addPart('G-2', 'Old gasket')).id,
     spareProcedureId: (await procedure('Flush twice')).id,
     personId: hand.personId,
   };

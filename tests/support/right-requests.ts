@@ -15,6 +15,7 @@ export function rightRequests(world: World): Record<string, RightRequest> {
     ...ofDockside(world),
     ...ofWork(world),
     ...ofWorkshop(world),
+    ...ofParts(world),
     ...ofOffice(world),
   };
 }
@@ -237,6 +238,39 @@ function ofWorkshop(world: World): Record<string, RightRequest> {
     listMeasurements: { params: { id: world.unitId }, roles: EVERYONE, ...refused },
     getServiceRecord: { params: { id: world.closureId }, roles: EVERYONE, ...refused },
     withdrawSignOff: { params: { ...bench, signOffId }, roles: WORKSHOP, ...refused },
+  };
+}
+
+function ofParts(world: World): Record<string, RightRequest> {
+  const { home, partId, kitId } = world;
+  const part = { params: { id: partId }, roles: WORKSHOP, ...refused };
+  const task = { params: { id: world.openTaskId }, roles: WORKSHOP, ...refused };
+  return {
+    listParts: { query: { dockId: home.dock.id, low: 'false' }, roles: EVERYONE, ...refused },
+    createPart: {
+      body: {
+        ...{ id: randomUUID(), number: 'K-9', name: 'Fuel kit', supplier: 'The chandler' },
+        contents: [{ partId, quantity: 2 }],
+      },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    getPart: { params: { id: kitId }, roles: EVERYONE },
+    changePart: { ...part, body: { name: 'Gasket, thin', supplier: null } },
+    retirePart: { params: { id: world.sparePartId }, roles: WORKSHOP, ...refused },
+    markLow: { ...part, body: { dockId: home.dock.id, lowAt: 4 } },
+    listStock: { query: { dockId: home.dock.id, low: 'true' }, roles: EVERYONE, ...refused },
+    listStockMoves: { query: { partId, dockId: home.dock.id, limit: '5' }, roles: EVERYONE, ...refused },
+    recordStockMove: {
+      body: { kind: 'make_up', id: randomUUID(), partId: kitId, dockId: home.dock.id, quantity: 1 },
+      roles: WORKSHOP,
+      ...refused,
+    },
+    getTaskParts: { params: { id: world.openTaskId }, roles: EVERYONE, ...refused },
+    sayNeed: { ...task, body: { partId, quantity: 3 } },
+    reserveParts: task,
+    setReservation: { ...task, body: { partId, quantity: 2, dockId: home.dock.id } },
+    releaseParts: task,
   };
 }
 

@@ -113,7 +113,8 @@ function spoilObject(shape: Shape, right: Fields, at: string, wrap: (body: Field
     if (shape.required?.includes(name)) {
       const { [name]: _, ...rest } = right;
       spoilt.push({ why: `${field} missing`, field, body: wrap(rest) });
-      spoilt.push({ why: `${field} null`, field, body: wrap({ ...right, [name]: null }) });
+      if (!each.anyOf?.some(({ type }) => type === 'null'))
+        spoilt.push({ why: `${field} null`, field, body: wrap({ ...right, [name]: null }) });
     }
     for (const [why, value] of wrongValues(each))
       spoilt.push({ why: `${field}: ${why}`, field, body: wrap({ ...right, [name]: value }) });
