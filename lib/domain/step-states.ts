@@ -189,12 +189,10 @@ function settleByLater(state: StepState, states: readonly StepState[]): StepStat
   return {
     ...state,
     places: state.places.map((one) => {
-      const last = later
-        .flatMap(({ places }) => places)
-        .findLast(
-          ({ place, applies, last }) => place === one.place && applies === 'yes' && last !== null,
-        )?.last;
-      return last ? { ...one, last } : one;
+      const said = later
+        .flatMap(({ step: { key }, places }) => places.map((place) => ({ key, place })))
+        .findLast(({ place }) => place.place === one.place && place.applies === 'yes' && place.last !== null);
+      return said ? { ...one, last: said.place.last, settledBy: said.key } : one;
     }),
   };
 }
