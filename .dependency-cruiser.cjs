@@ -15,6 +15,10 @@ const SERVER_PACKAGES = [
   '@node-rs',
   'smtp-server',
   'mailparser',
+  '@aws-sdk',
+  'sharp',
+  'file-type',
+  'pdfkit',
 ];
 const EDGES = ['auth', 'http', 'client', 'mail', 'papers', 'storage', 'launch'];
 
@@ -37,7 +41,12 @@ const HOUSE = [
   {
     name: 'app/api',
     from: '^app/api/',
-    to: ['^app/api/', '^lib/(actions|http|papers|schemas)/', '^lib/auth/', npm('next', 'next-auth', 'zod')],
+    to: [
+      '^app/api/',
+      '^lib/(actions|http|papers|schemas|storage)/',
+      '^lib/auth/',
+      npm('next', 'next-auth', 'zod'),
+    ],
   },
   {
     name: 'app pages',
@@ -124,7 +133,7 @@ const HOUSE = [
     from: '^jobs/',
     to: [
       '^jobs/',
-      '^lib/(actions|schemas|mail)/',
+      '^lib/(actions|schemas|mail|storage)/',
       '^lib/(context|env|errors)\\.ts$',
       '^db/client\\.ts$',
       npm('graphile-worker', 'kysely', 'zod'),

@@ -348,6 +348,25 @@ export interface SignOffTable {
   withdrawn_by: string | null;
 }
 
+export interface AttachmentTable {
+  id: string;
+  unit_id: string;
+  task_id: string | null;
+  defect_id: string | null;
+  kind: 'picture' | 'document';
+  name: string;
+  content_type: string;
+  object_key: string;
+  thumb_key: string | null;
+  bytes: number;
+  width: number | null;
+  height: number | null;
+  added_at: Instant;
+  added_by: string | null;
+  removed_at: MaybeInstant;
+  removed_by: string | null;
+}
+
 export interface ClosureTable {
   id: Generated<string>;
   task_id: string;
@@ -516,6 +535,7 @@ export interface DB {
   step_entry: StepEntryTable;
   task_presence: TaskPresenceTable;
   sign_off: SignOffTable;
+  attachment: AttachmentTable;
   closure: ClosureTable;
   part: PartTable;
   kit_part: KitPartTable;

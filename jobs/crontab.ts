@@ -13,6 +13,7 @@ export const TIMES: readonly { task: JobName; at: string; madeUpMs: number }[] =
   { task: 'tick-digests', at: '*/15 * * * *', madeUpMs: QUARTER_HOUR_MS },
   { task: 'refresh-fleet', at: '10 2 * * *', madeUpMs: DAY_MS },
   { task: 'tidy', at: '40 2 * * *', madeUpMs: DAY_MS },
+  { task: 'sweep-files', at: '50 2 * * *', madeUpMs: DAY_MS },
 ];
 
 /** One job of a kind at a time: one that still waits when the next falls due is the same job. */

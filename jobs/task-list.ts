@@ -6,6 +6,7 @@ import { run as refreshFleet } from './tasks/refresh-fleet';
 import { run as sendDigest } from './tasks/send-digest';
 import { run as sendMail } from './tasks/send-mail';
 import { run as sendPasswordReset } from './tasks/send-password-reset';
+import { run as sweepFiles } from './tasks/sweep-files';
 import { run as tickDigests } from './tasks/tick-digests';
 import { run as tidy } from './tasks/tidy';
 
@@ -19,4 +20,5 @@ export const TASKS: Record<JobName, JobRun> = {
   'tick-digests': tickDigests,
   'send-digest': sendDigest,
   tidy,
+  'sweep-files': sweepFiles,
 };

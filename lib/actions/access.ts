@@ -1,3 +1,4 @@
+import { findAttachment, type AttachmentRow } from '@/db/queries/attachments';
 import { findModel, type ModelRow } from '@/db/queries/models';
 import { findClosure, type ClosureRow } from '@/db/queries/closures';
 import { findDefect, type DefectRow } from '@/db/queries/defects';
@@ -151,9 +152,14 @@ export async function accessReading(ctx: Context, id: string, act: DockAct): Pro
   return checkRow(ctx, await findReading(ctx.db, id), act, ['id', 'reading']);
 }
 
-/** The defect, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
-export async function accessDefect(ctx: Context, id: string, act: DockAct): Promise<Checked<DefectRow>> {
-  return checkRow(ctx, await findDefect(ctx.db, id), act, ['id', 'defect']);
+/** The defect, with its unit's dock. Throws `not_found` on `path`, or `forbidden`. */
+export async function accessDefect(
+  ctx: Context,
+  id: string,
+  act: DockAct,
+  path = 'id',
+): Promise<Checked<DefectRow>> {
+  return checkRow(ctx, await findDefect(ctx.db, id), act, [path, 'defect']);
 }
 
 /** The lay-up, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
@@ -172,6 +178,15 @@ export async function accessPerson(
   const row = await findPerson(ctx.db, personId);
   if (!row) throw refuseField(path, 'is nobody here', 'not_found');
   return row as Checked<PersonRow>;
+}
+
+/** The picture or document, removed or not, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */
+export async function accessAttachment(
+  ctx: Context,
+  id: string,
+  act: DockAct,
+): Promise<Checked<AttachmentRow>> {
+  return checkRow(ctx, await findAttachment(ctx.db, id), act, ['id', 'attachment']);
 }
 
 /** The closure, with its unit's dock. Throws `not_found` on `id`, or `forbidden`. */

@@ -50,6 +50,9 @@ const AT_DOCK = {
   'closure.reverse': MANAGER,
   'stock.read': EVERYONE,
   'stock.write': WORKSHOP,
+  'attachment.read': EVERYONE,
+  'attachment.write': EVERYONE,
+  'attachment.remove': WORKSHOP,
   'digest.read': MANAGER,
 } as const satisfies Record<string, readonly Role[]>;
 

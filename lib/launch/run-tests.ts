@@ -39,6 +39,7 @@ function stageEnv(stage: Stage, serverUrl: string): NodeJS.ProcessEnv {
     // An ordinary run of the launcher may have settled these for another database.
     DATABASE_URL: undefined,
     SMTP_URL: undefined,
+    S3_URL: undefined,
   };
 }
 

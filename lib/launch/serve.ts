@@ -1,6 +1,8 @@
 import { randomBytes } from 'node:crypto';
+import path from 'node:path';
 import { EnvError, type Env, type LaunchSettings, parseEnv, parseLaunchSettings } from '@/lib/env';
 import { startMailbox } from '@/tests/fakes/mailbox';
+import { startObjectStore } from '@/tests/fakes/object-store';
 import { createCleanup } from './cleanup';
 import { isEmpty, migrate, prepareEmbeddedDatabase, startEmbeddedServer } from './embedded';
 import { ensureBuild } from './ensure-build';
@@ -52,10 +54,18 @@ async function openMailbox(settings: LaunchSettings, cleanup: Cleanup) {
   return mailbox;
 }
 
+async function openFiles(settings: LaunchSettings, cleanup: Cleanup): Promise<string> {
+  if (settings.S3_URL) return settings.S3_URL;
+  const store = await startObjectStore({ directory: path.join(root, '.wakewright/files') });
+  cleanup.add('object store', () => store.stop());
+  return store.url;
+}
+
 async function resolveEnv(
   settings: LaunchSettings,
   database: Database,
   mail: { smtpUrl: string; webUrl?: string },
+  filesUrl: string,
 ): Promise<Env> {
   const port = await freePort(settings.PORT, settings.HOST);
   if (port !== settings.PORT) console.log(`• Port ${settings.PORT} is taken; using ${port}.`);
@@ -63,6 +73,7 @@ async function resolveEnv(
     ...Object.fromEntries(Object.entries(settings).map(([name, value]) => [name, String(value)])),
     DATABASE_URL: database.url,
     SMTP_URL: mail.smtpUrl,
+    S3_URL: filesUrl,
     MAILBOX_URL: settings.MAILBOX_URL ?? mail.webUrl,
     PORT: String(port),
     PUBLIC_URL: settings.PUBLIC_URL ?? `http://127.0.0.1:${port}`,
@@ -79,7 +90,12 @@ async function launch(mode: Mode, settings: LaunchSettings, cleanup: Cleanup): P
     await ensureBuild(root, (build) => cleanup.add('build', () => build.stop()));
   }
   const mailbox = await openMailbox(settings, cleanup);
-  const env = await resolveEnv(settings, database, mailbox ?? { smtpUrl: settings.SMTP_URL ?? '' });
+  const env = await resolveEnv(
+    settings,
+    database,
+    mailbox ?? { smtpUrl: settings.SMTP_URL ?? '' },
+    await openFiles(settings, cleanup),
+  );
   const services = runServices({ root, mode, env, note: (name, pid) => noteProcess(root, name, pid) });
   cleanup.add('web server and worker', () => services.stop());
   await step('Starting the web server and the worker', () => services.ready);

@@ -10,6 +10,7 @@ export const jobs = {
   'tick-digests': z.object({}),
   'send-digest': z.object({ personId: z.uuid(), weekOn: z.iso.date() }),
   tidy: z.object({}),
+  'sweep-files': z.object({}),
 } as const;
 
 export type JobName = keyof typeof jobs;

@@ -101,7 +101,7 @@ export function describeApi(version: string): OpenApi {
 type Describe = (schema: z.ZodType, io: Io) => Json;
 
 function describeOperation(operation: Operation, describe: Describe): Json {
-  const { id, tag, summary, open, params, query, body, status } = operation;
+  const { id, tag, summary, open, params, query, body, takesFile, status } = operation;
   const parameters = [
     ...(params ? describeParameters('path', describe(params, 'input')) : []),
     ...(query ? describeParameters('query', describe(query, 'input')) : []),
@@ -115,6 +115,9 @@ function describeOperation(operation: Operation, describe: Describe): Json {
     ...(body && {
       requestBody: { required: true, content: { 'application/json': { schema: describe(body, 'input') } } },
     }),
+    ...(takesFile && {
+      requestBody: { required: true, content: { 'application/octet-stream': {} } },
+    }),
     responses: {
       [status]: describeAnswer(operation, describe),
       default: { $ref: '#/components/responses/Problem' },
@@ -124,6 +127,8 @@ function describeOperation(operation: Operation, describe: Describe): Json {
 
 function describeAnswer({ answer, summary }: Operation, describe: Describe): Json {
   if (answer === null) return { description: 'Done' };
+  if (answer === 'file')
+    return { description: summary, content: { 'image/jpeg': {}, 'application/pdf': {} } };
   if (answer === 'pdf') return { description: summary, content: { 'application/pdf': {} } };
   if (answer === 'html') return { description: summary, content: { 'text/html': {} } };
   return { description: summary, content: { 'application/json': { schema: describe(answer, 'output') } } };

@@ -13,6 +13,8 @@ export type Operation = {
   query?: z.ZodType;
   body?: z.ZodType;
   status: number;
-  /** Null for an answer without a body, `html` for a page, `pdf` for a paper. */
-  answer: z.ZodType | 'html' | 'pdf' | null;
+  /** Null for an answer without a body, `html` for a page, `pdf` for a paper, `file` for what was kept. */
+  answer: z.ZodType | 'html' | 'pdf' | 'file' | null;
+  /** It takes a file as its body, as it is. */
+  takesFile?: true;
 };

@@ -1,5 +1,6 @@
 import type { Operation } from './operation';
 import { DOCKSIDE_OPERATIONS } from './operations-dockside';
+import { FILES_OPERATIONS } from './operations-files';
 import { FLEET_OPERATIONS } from './operations-fleet';
 import { OFFICE_OPERATIONS } from './operations-office';
 import { PARTS_OPERATIONS } from './operations-parts';
@@ -14,6 +15,7 @@ export const OPERATIONS: readonly Operation[] = [
   ...WORK_OPERATIONS,
   ...WORKSHOP_OPERATIONS,
   ...PARTS_OPERATIONS,
+  ...FILES_OPERATIONS,
   ...OFFICE_OPERATIONS,
   ...SERVER_OPERATIONS,
 ];

@@ -91,10 +91,13 @@ async function passTheRest(page: Page): Promise<void> {
       await field.press('Enter');
     }
   }
-  const open = page
-    .locator('[role=group]:not(:has([aria-pressed=true]))')
-    .getByRole('button', { name: 'Pass' });
-  while ((await open.count()) > 0) await open.first().click();
+  const open = page.locator('[role=group]:has(> [aria-pressed]):not(:has([aria-pressed=true]))');
+  while ((await open.count()) > 0) {
+    const name = (await open.first().getAttribute('aria-label'))!;
+    const button = page.getByRole('group', { name, exact: true }).getByRole('button', { name: 'Pass' });
+    await button.click();
+    await expect(button).toHaveAttribute('aria-pressed', 'true');
+  }
 }
 
 const allSaved = (page: Page) => expect(page.getByText('All saved')).toBeVisible();

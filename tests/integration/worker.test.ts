@@ -132,6 +132,7 @@ test('the clock’s jobs are kinds that the worker knows, every quarter of an ho
     'tick-digests */15 * * * *',
     'refresh-fleet 10 2 * * *',
     'tidy 40 2 * * *',
+    'sweep-files 50 2 * * *',
   ]);
   expect(TIMES.filter(({ task }) => !(task in TASKS))).toEqual([]);
 });

@@ -1,5 +1,9 @@
+import { mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
 import { test as base } from '@playwright/test';
 import { type Mailbox, startMailbox } from '../fakes/mailbox';
+import { startObjectStore } from '../fakes/object-store';
 import { type App, startApp } from './app';
 import { cloneDatabase, type TestDatabase } from './clone';
 import { DEMO } from './database-names';
@@ -17,9 +21,12 @@ export const SETUP_TOKEN = 'tests-only: printed at start';
 async function run(template: string | undefined, use: (running: Running) => Promise<void>): Promise<void> {
   const database = await cloneDatabase(process.env.TEST_SERVER_URL ?? '', template);
   const mailbox = await startMailbox();
+  const directory = await mkdtemp(path.join(tmpdir(), 'wakewright-files-'));
+  const store = await startObjectStore({ directory });
   const app = await startApp({
     databaseUrl: database.url,
     smtpUrl: mailbox.smtpUrl,
+    filesUrl: store.url,
     env: { SETUP_TOKEN },
   });
   try {
@@ -27,6 +34,8 @@ async function run(template: string | undefined, use: (running: Running) => Prom
   } finally {
     await app.stop();
     await mailbox.stop();
+    await store.stop();
+    await rm(directory, { recursive: true });
     await database.destroy();
   }
 }

@@ -60,6 +60,23 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
   await post('/stock-moves', {
     ...{ kind: 'receive', id: randomUUID(), partId, dockId: home.dock.id, quantity: 20 },
   });
+  const attachmentId = randomUUID();
+  await database.db
+    .insertInto('attachment')
+    .values({
+      ...{
+        id: attachmentId,
+        unit_id: unitId,
+        kind: 'picture',
+        name: 'hatch.jpg',
+        bytes: 1,
+        width: 1,
+        height: 1,
+      },
+      ...{ content_type: 'image/jpeg', object_key: randomUUID(), thumb_key: randomUUID() },
+      added_at: new Date(),
+    })
+    .execute();
   const outingUnit = await addUnit('N-5');
   await refreshDue(asSystem(database.db, new Date()), { unitIds: [outingUnit.id] });
   return {
@@ -94,6 +111,7 @@ export async function makeWorld(database: ReturnType<typeof testDatabase>, api: 
     procedureId: flush,
     benchTaskId: bench.id,
     signOffId,
+    attachmentId,
     partId,
     kitId,
     sparePartId: (await addPart('G-2', 'Old gasket')).id,

@@ -16,6 +16,7 @@ export function rightRequests(world: World): Record<string, RightRequest> {
     ...ofWork(world),
     ...ofWorkshop(world),
     ...ofParts(world),
+    ...ofFiles(world),
     ...ofOffice(world),
   };
 }
@@ -271,6 +272,22 @@ function ofParts(world: World): Record<string, RightRequest> {
     reserveParts: task,
     setReservation: { ...task, body: { partId, quantity: 2, dockId: home.dock.id } },
     releaseParts: task,
+  };
+}
+
+function ofFiles({ attachmentId, unitId, taskId }: World): Record<string, RightRequest> {
+  const params = { id: attachmentId };
+  return {
+    listAttachments: { query: { unitId }, roles: EVERYONE, ...refused },
+    addAttachment: {
+      query: { id: randomUUID(), unitId, taskId, name: 'hatch.jpg' },
+      roles: EVERYONE,
+      ...refused,
+    },
+    readAttachment: { params, roles: EVERYONE, ...refused },
+    readAttachmentThumb: { params, roles: EVERYONE, ...refused },
+    removeAttachment: { params, roles: WORKSHOP, ...refused },
+    restoreAttachment: { params, roles: WORKSHOP, ...refused },
   };
 }
 
