@@ -12,7 +12,17 @@ const config = {
   reactStrictMode: true,
   // Types are checked by npm test; the build must not need packages that only tests use.
   typescript: { ignoreBuildErrors: true },
-  serverExternalPackages: ['pg', 'graphile-worker', '@node-rs/argon2', 'nodemailer', 'pdfkit', 'rrule', 'sharp', 'file-type', '@aws-sdk/client-s3'],
+  serverExternalPackages: [
+    'pg',
+    'graphile-worker',
+    '@node-rs/argon2',
+    'nodemailer',
+    'pdfkit',
+    'rrule',
+    'sharp',
+    'file-type',
+    '@aws-sdk/client-s3',
+  ],
   // Pages get their policy, with a nonce, from proxy.ts.
   headers: async () => [
     { source: '/:path*', headers: everywhere },

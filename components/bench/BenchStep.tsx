@@ -12,6 +12,7 @@ import { CheckEntry } from './CheckEntry';
 import { FollowUpOffer } from './FollowUpOffer';
 import { MeasureEntry } from './MeasureEntry';
 import { NoteEntry } from './NoteEntry';
+import { PhotoEntry } from './PhotoEntry';
 import { useSharedWork } from './WorkProvider';
 
 /** Names a place of a step on the page, so that what is missing can lead to it. */
@@ -104,6 +105,7 @@ function Place({ state: { step, places }, place }: { state: StepState; place: Pl
 function Entry({ step, place, name }: { step: StepState['step']; place: PlaceState; name: string }) {
   if (step.kind === 'check') return <CheckEntry step={step} place={place} name={name} />;
   if (step.kind === 'note') return <NoteEntry step={step} place={place} name={name} />;
+  if (step.kind === 'photo') return <PhotoEntry step={step} place={place} />;
   if (!step.measures) return null;
   return (
     <div className="grid gap-4">

@@ -27,16 +27,18 @@ export function SaveState() {
           <Tag tone="ok">All saved</Tag>
         ) : null}
       </span>
-      {refused.map((entry) => (
-        <Notice
-          key={entry.order}
-          tone="danger"
-          title={`Not taken: ${String(titleOf(entry.body['stepKey']))}`}
-          action={<Button onClick={() => discard(entry)}>Forget this entry</Button>}
-        >
-          {entry.refused?.detail}
-        </Notice>
-      ))}
+      {refused
+        .filter(({ file }) => !file)
+        .map((entry) => (
+          <Notice
+            key={entry.order}
+            tone="danger"
+            title={`Not taken: ${String(titleOf(entry.body['stepKey']))}`}
+            action={<Button onClick={() => discard(entry)}>Forget this entry</Button>}
+          >
+            {entry.refused?.detail}
+          </Notice>
+        ))}
     </>
   );
 }

@@ -26,7 +26,7 @@ export function joinEntries(
 ): BenchEntry[] {
   const known = new Set(entries.map(({ id }) => id));
   const waiting = kept
-    .filter(({ id, refused }) => refused === null && !known.has(id))
+    .filter(({ id, refused, file }) => !file && refused === null && !known.has(id))
     .flatMap((entry): BenchEntry[] => {
       const body = entry.body as unknown as {
         stepKey: string;

@@ -22,7 +22,8 @@ export type BenchWork = {
   work: Work;
   states: StepState[];
   entries: BenchEntry[];
-  /** Entered here and not sent yet, and entered here and refused. */
+  /** All that this device has for the task: what is not sent yet, and what was refused. */
+  kept: KeptEntry[];
   waiting: KeptEntry[];
   refused: KeptEntry[];
   overtaken: Overtaken[];
@@ -85,7 +86,7 @@ export function useWork(initial: Work, me: { id: string; name: string }, mayWork
     [path, ask],
   );
   return {
-    ...{ work, states, entries, overtaken, faults, ready, enter, act },
+    ...{ work, states, entries, overtaken, faults, kept, ready, enter, act },
     waiting: kept.filter(({ refused }) => refused === null),
     refused: kept.filter(({ refused }) => refused !== null),
     reached: failure === null,
@@ -99,7 +100,8 @@ function useArrivals(ask: () => Promise<void>) {
   const [overtaken, setOvertaken] = useState<Overtaken[]>([]);
   const [arrived, setArrived] = useState<Entry[]>([]);
   const sent = useCallback(
-    ({ id }: KeptEntry, answer: unknown) => {
+    ({ id, file }: KeptEntry, answer: unknown) => {
+      if (file) return;
       const { entry, overtook } = answer as RecordedEntry;
       setArrived((list) => [...list, entry]);
       if (overtook) setOvertaken((list) => [...list, { id, overtook }]);

@@ -1,7 +1,8 @@
-import type { Insertable } from 'kysely';
+import type { Insertable, Transaction } from 'kysely';
+import { listAttachments } from '@/db/queries/attachments';
 import { findStepEntry, insertStepEntries, listStepEntries } from '@/db/queries/step-entries';
 import { getTaskStanding, lockTask } from '@/db/queries/tasks';
-import type { StepEntryTable } from '@/db/tables';
+import type { DB, StepEntryTable } from '@/db/tables';
 import { runTransaction } from '@/db/transaction';
 import type { Context } from '@/lib/context';
 import { personIdOf } from '@/lib/domain/access';
@@ -46,6 +47,7 @@ export async function recordEntry(ctx: Context, taskId: string, input: RecordEnt
       );
       const entry = { ...toColumns(ctx, bench, spot), follows_id: stood?.id ?? null, entered_at: at };
       const value = toEntryValue(spot.step, input.value);
+      if (value.kind === 'photo') await checkPictures(trx, taskId, value.attachmentIds);
       const entries = before.map(toStepEntry);
       checkApplies(computeBench(bench, entries), spot, input.value);
       await insertStepEntries(trx, [{ ...entry, id: input.id, ...judge(bench, spot, entries, value) }]);
@@ -59,6 +61,13 @@ export async function recordEntry(ctx: Context, taskId: string, input: RecordEnt
       };
     }),
   );
+}
+
+/** Throws `invalid_input` unless every picture is one of the task's. */
+async function checkPictures(trx: Transaction<DB>, taskId: string, ids: readonly string[]): Promise<void> {
+  const known = new Set((await listAttachments(trx, { taskId })).map(({ id }) => id));
+  for (const [index, id] of ids.entries())
+    if (!known.has(id)) throw refuseField(`value.attachmentIds.${index}`, 'is no picture of this task');
 }
 
 /** The columns of an entry that do not depend on what was entered. */

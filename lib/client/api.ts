@@ -12,7 +12,7 @@ export type Answer<T> = { ok: true; data: T } | Failure;
 type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
 
 /** A request that got no answer: it may or may not have been carried out. */
-const LOST: Failure = {
+export const LOST: Failure = {
   ok: false,
   code: 'connection_lost',
   detail: 'No answer from the server. Check the connection and try again.',
@@ -51,7 +51,8 @@ async function readAnswer<T>(response: Response): Promise<Answer<T>> {
   }
 }
 
-function toFailure(json: unknown): Failure {
+/** A refusal as the API sent it; anything else as a fault. */
+export function toFailure(json: unknown): Failure {
   const problem = (typeof json === 'object' && json !== null ? json : {}) as Partial<Failure>;
   return {
     ok: false,

@@ -1,5 +1,6 @@
 import { openDB, type DBSchema, type IDBPDatabase } from 'idb';
 import { send, type Failure } from './api';
+import { sendFile } from './send-file';
 
 /** Something entered that the server is to have. `id` is the entry's own: sent twice, it is kept once. */
 export type OutboxEntry = {
@@ -10,6 +11,8 @@ export type OutboxEntry = {
   owner: string;
   path: string;
   body: Readonly<Record<string, unknown>>;
+  /** A file goes as it is, in place of `body`. */
+  file?: Blob;
   madeAt: string;
 };
 /** An entry on this device, in the order it was made; `refused` once the server would not have it. */
@@ -51,6 +54,19 @@ export function onOutboxChange(listener: () => void): () => void {
   return () => changes.removeEventListener('change', listener);
 }
 
+/** How much of each file that is on its way has gone, from 0 to 1, by its entry's id. */
+const progress = new Map<string, number>();
+
+/** How much of an entry's file has gone, from 0 to 1; null while it is not on its way. */
+export function progressOf(id: string): number | null {
+  return progress.get(id) ?? null;
+}
+
+function tellProgress(id: string, share: number): void {
+  progress.set(id, share);
+  changes.dispatchEvent(new Event('change'));
+}
+
 /** Keeps an entry on this device. It is safe from a reload, a lost connection and a closed browser once this is done. */
 export async function keepEntry(entry: OutboxEntry): Promise<void> {
   const database = await open();
@@ -79,7 +95,10 @@ export async function drainOutbox(
     const database = await open();
     const all = (await database.getAll('entry')) as KeptEntry[];
     for (const entry of all.filter((one) => one.owner === owner && one.refused === null)) {
-      const answer = await send<unknown>('POST', entry.path, entry.body);
+      const answer = entry.file
+        ? await sendFile<unknown>(entry.path, entry.file, (share) => tellProgress(entry.id, share))
+        : await send<unknown>('POST', entry.path, entry.body);
+      progress.delete(entry.id);
       if (answer.ok) {
         await database.delete('entry', entry.order);
         sent(entry, answer.data);

@@ -1,4 +1,5 @@
 import type { Page } from '@playwright/test';
+import sharp from 'sharp';
 import { extractText, getDocumentProxy } from 'unpdf';
 import { addStarterProcedures } from '@/lib/actions/add-starter-procedures';
 import { changeModel } from '@/lib/actions/change-model';
@@ -249,12 +250,23 @@ test('a connection cut in the middle, a reload and a closed browser lose nothing
     await expect(half).toHaveValue('2');
   });
 
-  await test.step('what is entered without a connection waits on the device, in view', async () => {
+  await test.step('a picture taken without a connection is kept too, and in view', async () => {
     await page.context().setOffline(true);
+    const step = page.getByRole('listitem').filter({ hasText: 'Picture of lines and linkage' });
+    const name = 'linkage.png';
+    const body = await sharp({ create: { width: 64, height: 48, channels: 3, background: '#7a3b10' } })
+      .png()
+      .toBuffer();
+    await step.getByLabel('Choose pictures').setInputFiles({ name, mimeType: 'image/png', buffer: body });
+    await expect(step.getByRole('img', { name })).toBeVisible();
+    await expect(step.getByText('Kept on this device, not sent yet.')).toBeVisible();
+  });
+
+  await test.step('what is entered without a connection waits on the device, in view', async () => {
     await measure(page, FOUND, 1, 'As found', '25', '25');
     await choose(page, HOLDS, 'Pass', 1);
     await choose(page, HOLDS, 'Fail', 2);
-    await expect(page.getByText(/4 entries kept on this device|3 entries kept on this device/)).toBeVisible();
+    await expect(page.getByText(/[5-6] entries kept on this device/)).toBeVisible();
     await expect(page.getByText('Kept on this device, not sent yet.').first()).toBeVisible();
   });
 
@@ -271,6 +283,13 @@ test('a connection cut in the middle, a reload and a closed browser lose nothing
       'aria-pressed',
       'true',
     );
+    const picture = again.getByRole('button', {
+      name: 'Open Picture of lines and linkage before they come off, 1',
+    });
+    await picture.click();
+    const large = again.getByRole('dialog').getByRole('img');
+    await expect(large).toHaveJSProperty('naturalWidth', 64);
+    await again.keyboard.press('Escape');
     const rows = await empty.database.db
       .selectFrom('step_entry')
       .select(['step_key', 'place', 'value'])
@@ -284,6 +303,7 @@ test('a connection cut in the middle, a reload and a closed browser lose nothing
         : 'outcome' in value && value.outcome,
     ]);
     expect(kept.filter(([key]) => key !== 'pop-off')).toEqual([
+      ['as-mounted', 0, false],
       ['needle-holds', 1, 'pass'],
       ['needle-holds', 2, 'fail'],
     ]);

@@ -3,6 +3,7 @@ import { cache, type ReactNode } from 'react';
 import { OpenPoints } from '@/components/bench/OpenPoints';
 import { SignOffs } from '@/components/bench/SignOffs';
 import { WorkProvider } from '@/components/bench/WorkProvider';
+import { FilesSection } from '@/components/files/FilesSection';
 import { Cautions } from '@/components/task/Cautions';
 import { CloseForm } from '@/components/task/CloseForm';
 import { ClosuresSection, NotesSection, PlanSection, ProcedureSection } from '@/components/task/sections';
@@ -13,6 +14,7 @@ import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getTask } from '@/lib/actions/get-task';
+import { listAttachments } from '@/lib/actions/list-attachments';
 import { getWork } from '@/lib/actions/get-work';
 import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
@@ -33,7 +35,7 @@ export default async function TaskPage({ params }: Props) {
   const now = ctx.now.toISOString();
   const open = task.endedAt === null;
   const mayWork = open && may(ctx, 'task.write', task.dockId);
-  const work = await getWork(ctx, task.id);
+  const [work, files] = await Promise.all([getWork(ctx, task.id), listAttachments(ctx, { taskId: task.id })]);
   return (
     <>
       <PageHeader
@@ -70,6 +72,13 @@ export default async function TaskPage({ params }: Props) {
           {task.procedure ? <ProcedureSection procedure={task.procedure} open={open} /> : null}
           <Columns>
             <div className="grid content-start gap-8">
+              <FilesSection
+                of={{ unitId: task.unitId, taskId: task.id }}
+                initial={files.items}
+                me={ctx.actor.personId}
+                mayAdd={may(ctx, 'attachment.write', task.dockId)}
+                mayRemove={may(ctx, 'attachment.remove', task.dockId)}
+              />
               <NotesSection task={task} now={now} mayWrite={may(ctx, 'task.write', task.dockId)} />
               <ClosuresSection task={task} now={now} mayReverse={may(ctx, 'closure.reverse', task.dockId)} />
             </div>

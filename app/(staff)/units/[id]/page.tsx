@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { cache } from 'react';
+import { FilesSection } from '@/components/files/FilesSection';
 import { UnitMeasurements } from '@/components/measurements/UnitMeasurements';
 import { UnitActions } from '@/components/units/UnitActions';
 import { UnitDuties } from '@/components/units/UnitDuties';
@@ -10,8 +11,10 @@ import { UnitStanding } from '@/components/units/UnitStanding';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
+import { listAttachments } from '@/lib/actions/list-attachments';
 import { listMeasurements } from '@/lib/actions/list-measurements';
 import { openUnit } from '@/lib/actions/open-unit';
+import { may as mayAtDock } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
 import { unitPageQuery } from '@/lib/schemas/fleet';
@@ -37,13 +40,17 @@ export async function generateMetadata(props: Props): Promise<Metadata> {
 export default async function UnitPage(props: Props) {
   const page = await loadFrom(props);
   const { unit, duties, may } = page;
-  const measurements = await listMeasurements(await pageContext(), unit.id);
+  const ctx = await pageContext();
+  const [measurements, files] = await Promise.all([
+    listMeasurements(ctx, unit.id),
+    listAttachments(ctx, { unitId: unit.id }),
+  ]);
   return (
     <>
       <PageHeader
         kicker={`${unit.modelName} · ${unit.dockName}`}
         title={<span className="numerals">{unit.fleetNumber}</span>}
-        actions={<UnitActions page={page} />}
+        actions={<UnitActions page={page} me={ctx.actor.personId} />}
       />
       <div className="grid gap-10">
         <UnitStanding page={page} />
@@ -67,6 +74,13 @@ export default async function UnitPage(props: Props) {
           <UnitFacts unit={unit} />
         </section>
         <UnitMeasurements measurements={measurements} />
+        <FilesSection
+          of={{ unitId: unit.id }}
+          initial={files.items}
+          me={ctx.actor.personId}
+          mayAdd={mayAtDock(ctx, 'attachment.write', unit.dockId)}
+          mayRemove={mayAtDock(ctx, 'attachment.remove', unit.dockId)}
+        />
         <UnitHistory page={page} />
       </div>
     </>
