@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import {
   describeOnFail,
   describeRetest,
@@ -43,7 +44,17 @@ export function BenchStep({ state, number }: { state: StepState; number: number 
         <span className="numerals text-xl font-bold text-line">{number}</span>
         <div className="grid gap-1.5">
           <h3 className="text-lg">{step.title}</h3>
-          <p className="text-ink-soft">{facts.join(' · ')}</p>
+          <p className="text-ink-soft">
+            {facts.join(' · ')}
+            {step.measures ? (
+              <>
+                {' · '}
+                <Link className="link" href={`/units/${work.unitId}#measurements`}>
+                  measured so far
+                </Link>
+              </>
+            ) : null}
+          </p>
           {idle ? null : (
             <>
               {step.detail ? <p className="max-w-prose">{step.detail}</p> : null}

@@ -1,3 +1,4 @@
+import { formatTenths } from '@/lib/domain/meter';
 import type { CreateCheckIn } from '@/lib/schemas/check-in';
 
 /** What is typed on the check-in screen. */
@@ -61,8 +62,8 @@ export function describeRun(typed: Typed, lastShown: number): { text: string; lo
   const tenths = Math.round(Number(typed.hours) * 10) - Math.round(lastShown * 10);
   if (tenths < 0)
     return {
-      text: `${(-tenths / 10).toFixed(1)} h less than the last reading. Read the meter again.`,
+      text: `${formatTenths(-tenths)} h less than the last reading. Read the meter again.`,
       lower: true,
     };
-  return { text: `${(tenths / 10).toFixed(1)} h since the last reading.`, lower: false };
+  return { text: `${formatTenths(tenths)} h since the last reading.`, lower: false };
 }

@@ -11,6 +11,7 @@ import { fieldError, send } from '@/lib/client/api';
 import { useSend } from '@/lib/client/use-send';
 import { localInstant } from '@/lib/domain/local-instant';
 import { parseHoursToTenths } from '@/lib/domain/meter';
+import { toHours } from '@/lib/schemas/schedule-shape';
 import type { Closure, TaskPage } from '@/lib/schemas/task';
 import { WhenFields, type When } from './WhenFields';
 
@@ -37,7 +38,7 @@ export function CloseForm({ task }: { task: Closing }) {
     const earlier = done.when === 'earlier';
     const body = {
       ...(earlier && day && time && { at: instantOf(day, time, task.timeZone) }),
-      ...(parsed?.ok && (earlier || hours !== live) && { engineHours: parsed.tenths / 10 }),
+      ...(parsed?.ok && (earlier || hours !== live) && { engineHours: toHours(parsed.tenths) }),
       ...(minutes.trim() && { minutes: Number(minutes) }),
       ...(note.trim() && { note }),
     };

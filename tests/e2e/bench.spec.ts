@@ -217,8 +217,9 @@ test('two mechanics at one task see each other and each other’s entries, and n
 
   await one.context().setOffline(true);
   await choose(one, HOLDS, 'Pass', 2);
+  const taken = other.waitForResponse((response) => response.url().endsWith('/entries'));
   await choose(other, HOLDS, 'Fail', 2);
-  await allSaved(other);
+  expect((await taken).status()).toBe(201);
   await one.context().setOffline(false);
   await expect(one.getByText('A mechanic had entered fail in the meantime.')).toBeVisible();
   for (const page of [one, other]) {
