@@ -1,4 +1,5 @@
 import { formatMeasured } from '@/lib/domain/measured-value';
+import { describeLimits } from '@/lib/domain/measurement';
 import { describeTrend } from '@/lib/domain/measurement-series';
 import type { MeasuredSeries } from '@/lib/schemas/measurements';
 import { scaleOf, type Scale } from './chart-scale';
@@ -26,6 +27,7 @@ export function MeasurementChart({ series, noun }: { series: MeasuredSeries; nou
     <figure className="grid content-start gap-2 border-t-2 border-edge pt-3">
       <figcaption className="grid gap-1">
         <h3 className="text-lg">{spec}</h3>
+        <p>{limits ? `Limits: ${describeLimits(limits)}.` : 'No limits are given for this.'}</p>
         <p className="flex flex-wrap gap-x-4 text-ink-soft">
           {places.map(({ place }, index) => (
             <span key={place}>
@@ -38,6 +40,10 @@ export function MeasurementChart({ series, noun }: { series: MeasuredSeries; nou
         </p>
       </figcaption>
       <Drawing series={series} scale={scale} />
+      <p className="flex justify-between text-ink-soft numerals">
+        <span>{Math.max(0, scale.hours.from).toFixed(0)} h</span>
+        <span>{scale.hours.to.toFixed(0)} h</span>
+      </p>
       {trends.map(({ place, trend }) => (
         <p key={place} className="font-semibold text-due">
           {nameOf(place)}: {describeTrend({ towards: trend!.towards, leftTenths: trend!.hoursLeft * 10 })}
@@ -71,13 +77,12 @@ export function MeasurementChart({ series, noun }: { series: MeasuredSeries; nou
           </tbody>
         </table>
       </details>
-      {limits ? null : <p className="text-ink-soft">No limits are given for this.</p>}
     </figure>
   );
 }
 
 const [WIDTH, HEIGHT] = [480, 180];
-const PAD = { left: 8, right: 8, top: 8, bottom: 22 };
+const PAD = { left: 8, right: 8, top: 8, bottom: 8 };
 const across = (x: number) => PAD.left + (x * (WIDTH - PAD.left - PAD.right)) / 100;
 const down = (y: number) => PAD.top + (y * (HEIGHT - PAD.top - PAD.bottom)) / 100;
 
@@ -112,15 +117,6 @@ function Drawing({
               stroke="currentColor"
               strokeWidth="1.5"
             />
-            <text
-              x={WIDTH - PAD.right}
-              y={word === 'most' ? y - 4 : y + 13}
-              textAnchor="end"
-              fontSize="12"
-              fill="currentColor"
-            >
-              {word} {formatMeasured(value, unit)}
-            </text>
           </g>
         );
       })}
@@ -151,12 +147,6 @@ function Drawing({
           </g>
         );
       })}
-      <text x={PAD.left} y={HEIGHT - 6} fontSize="12" className="fill-ink-soft">
-        {Math.max(0, scale.hours.from).toFixed(0)} h
-      </text>
-      <text x={WIDTH - PAD.right} y={HEIGHT - 6} textAnchor="end" fontSize="12" className="fill-ink-soft">
-        {scale.hours.to.toFixed(0)} h
-      </text>
     </svg>
   );
 }
