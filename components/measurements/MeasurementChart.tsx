@@ -86,13 +86,7 @@ const PAD = { left: 8, right: 8, top: 8, bottom: 8 };
 const across = (x: number) => PAD.left + (x * (WIDTH - PAD.left - PAD.right)) / 100;
 const down = (y: number) => PAD.top + (y * (HEIGHT - PAD.top - PAD.bottom)) / 100;
 
-function Drawing({
-  series: { spec, unit, limits, places },
-  scale,
-}: {
-  series: MeasuredSeries;
-  scale: Scale;
-}) {
+function Drawing({ series: { spec, limits, places }, scale }: { series: MeasuredSeries; scale: Scale }) {
   const lines = [
     { word: 'most', value: limits?.max ?? null },
     { word: 'least', value: limits?.min ?? null },
