@@ -10,18 +10,20 @@ const TASKS = { href: '/tasks', label: 'Tasks' };
 const UNITS = { href: '/units', label: 'Units' };
 const RULES = { href: '/rules', label: 'Rules' };
 const PROCEDURES = { href: '/procedures', label: 'Procedures' };
+const PARTS = { href: '/parts', label: 'Parts' };
 const ACCOUNT = { href: '/account', label: 'Account' };
 
 /** Where each role goes, in order of weight: the first answers its first question and is its home. */
 const BY_ROLE: Record<Role, Destination[]> = {
   dock: [BOARD, AVAILABILITY, UNITS, CALENDAR, TASKS, ACCOUNT],
-  mechanic: [TASKS, CALENDAR, AVAILABILITY, BOARD, UNITS, RULES, PROCEDURES, ACCOUNT],
+  mechanic: [TASKS, CALENDAR, AVAILABILITY, BOARD, UNITS, PARTS, RULES, PROCEDURES, ACCOUNT],
   manager: [
     AVAILABILITY,
     CALENDAR,
     TASKS,
     BOARD,
     UNITS,
+    PARTS,
     RULES,
     PROCEDURES,
     { href: '/review', label: 'Review' },

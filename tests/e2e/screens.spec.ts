@@ -19,6 +19,7 @@ type Rows = Awaited<ReturnType<typeof listRows>>;
 const manager = (rows: Rows) => [
   ...['/board', '/availability', '/units', '/calendar', '/calendar?view=list', '/tasks', '/account'],
   ...['/review', '/digest', '/docks', '/models', '/people', '/rules', '/procedures', '/procedures/new'],
+  ...['/parts', '/parts?show=low', '/parts/new', `/parts/${rows.part}`, `/parts/${rows.part}/edit`],
   ...['/units/new', '/docks/new', '/models/new', '/rules/new', '/tasks/new'],
   ...[
     `/units/${rows.ready}`,
@@ -64,6 +65,7 @@ async function listRows({ request }: Page) {
     dock: await first('docks'),
     model: await first('models'),
     procedure: await first('procedures'),
+    part: await first('parts'),
   };
 }
 
@@ -119,7 +121,7 @@ test('every page there is is looked at', () => {
   const id = 'x';
   const looked = [
     ...FOR_ANYBODY,
-    ...manager({ ready: id, held: id, task: id, rule: id, dock: id, model: id, procedure: id }),
+    ...manager({ ready: id, held: id, task: id, rule: id, dock: id, model: id, procedure: id, part: id }),
   ];
   const routes = listRoutes();
   // '/units/new' is a page of its own, not one of '/units/[id]'.
