@@ -7,6 +7,7 @@ import { TextInput } from '@/components/ui/TextInput';
 import type { RuleFormData } from '@/lib/schemas/rule-form';
 import { KIND_WORDS } from './due-words';
 import { LabourFields } from './LabourFields';
+import { PartFields } from './PartFields';
 import { labourOf, type RuleDraft } from './rule-draft';
 import { ScopeFields } from './ScopeFields';
 import { Section } from './Section';
@@ -103,6 +104,12 @@ export function RuleFields({
       </Section>
       <Section title="How long the work takes">
         <LabourFields form={form} labour={labourOf(draft)} />
+      </Section>
+      <Section
+        title="What parts it takes"
+        hint="A task sets them aside when it is started, and takes them out when it is closed."
+      >
+        <PartFields form={form} parts={data.parts} />
       </Section>
     </>
   );

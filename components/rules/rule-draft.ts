@@ -31,6 +31,14 @@ const AMOUNTS = [
 ] as const;
 export type AmountName = (typeof AMOUNTS)[number];
 
+/** A part that the work takes, as it is typed. */
+export type PartDraft = {
+  key: number;
+  partId: string;
+  quantity: string;
+  per: CreateRule['parts'][number]['per'];
+};
+
 /** A rule as it is typed. */
 export type RuleDraft = {
   name: string;
@@ -46,6 +54,7 @@ export type RuleDraft = {
   holdsUnit: boolean;
   /** Empty for none. */
   procedureId: string;
+  parts: PartDraft[];
   wantsSecondPerson: boolean;
   wantsTestRide: boolean;
 };
@@ -69,6 +78,7 @@ export function newDraft(today: CalendarDay): RuleDraft {
     carbMax: '',
     holdsUnit: true,
     procedureId: '',
+    parts: [],
     wantsSecondPerson: false,
     wantsTestRide: false,
   };
@@ -97,6 +107,7 @@ export function draftOf(rule: Rule, today: CalendarDay): RuleDraft {
     carbMax: String(appliesTo.carbCount?.max ?? ''),
     holdsUnit: rule.holdsUnit,
     procedureId: rule.procedureId ?? '',
+    parts: rule.parts.map((part, key) => ({ ...part, key, quantity: String(part.quantity) })),
     wantsSecondPerson: rule.wantsSecondPerson,
     wantsTestRide: rule.wantsTestRide,
   };
@@ -136,6 +147,7 @@ export function toInput(draft: RuleDraft) {
     },
     holdsUnit: draft.holdsUnit,
     ...(draft.procedureId && { procedureId: draft.procedureId }),
+    parts: draft.parts.map(({ partId, quantity, per }) => ({ partId, quantity: numberOf(quantity), per })),
     wantsSecondPerson: draft.wantsSecondPerson,
     wantsTestRide: draft.wantsTestRide,
     labour: {

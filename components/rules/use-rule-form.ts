@@ -38,7 +38,6 @@ export function useRuleForm(rule: Rule | null, today: string, readOnly: boolean)
     const answer = rule
       ? await send<Rule>('PUT', `/api/v1/rules/${rule.id}`, {
           ...checked.input,
-          parts: rule.parts,
           revision: rule.revision,
         })
       : await send<Rule>('POST', '/api/v1/rules', checked.input);

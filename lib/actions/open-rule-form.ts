@@ -1,5 +1,6 @@
 import { listDocks } from '@/db/queries/docks';
 import { listModels } from '@/db/queries/models';
+import { listParts } from '@/db/queries/parts';
 import { listProcedures } from '@/db/queries/procedures';
 import { listUnits } from '@/db/queries/units';
 import type { Context } from '@/lib/context';
@@ -17,12 +18,13 @@ import { getRule } from './get-rule';
 export async function openRuleForm(ctx: Context, ruleId: string | null): Promise<RuleFormData> {
   requireFleetWide(ctx, ruleId ? 'rule.read' : 'rule.write');
   const docks = visibleDocks(ctx.actor);
-  const [rule, models, dockRows, units, procedures] = await Promise.all([
+  const [rule, models, dockRows, units, procedures, parts] = await Promise.all([
     ruleId ? getRule(ctx, ruleId) : null,
     listModels(ctx.db),
     listDocks(ctx.db, docks),
     listUnits(ctx.db, docks),
     listProcedures(ctx.db),
+    listParts(ctx.db, { retired: true }),
   ]);
   return {
     rule,
@@ -30,6 +32,10 @@ export async function openRuleForm(ctx: Context, ruleId: string | null): Promise
     models: models.map(({ id, name, propulsion, stroke }) => ({ id, name, propulsion, stroke })),
     docks: dockRows.map(({ id, name, time_zone }) => ({ id, name, today: localDay(ctx.now, time_zone) })),
     procedures: procedures.map(({ id, name }) => ({ id, name })),
+    parts: parts
+      .filter(({ id, retired_at }) => !retired_at || rule?.parts.some(({ partId }) => partId === id))
+      .map(({ id, number, name }) => ({ id, number, name }))
+      .sort((a, b) => a.name.localeCompare(b.name, 'en')),
     fleet: units.map((unit) => ({
       id: unit.id,
       fleetNumber: unit.fleet_number,

@@ -10,6 +10,8 @@ export type RuleFormData = {
   docks: { id: string; name: string; today: string }[];
   /** Those in use. */
   procedures: { id: string; name: string }[];
+  /** Those in use, and those the rule names. */
+  parts: { id: string; number: string; name: string }[];
   fleet: {
     id: string;
     fleetNumber: string;
