@@ -7,18 +7,31 @@ import { ErrorSummary } from '@/components/ui/ErrorSummary';
 import { NumberInput } from '@/components/ui/NumberInput';
 import { Textarea } from '@/components/ui/Textarea';
 import { useToast } from '@/components/ui/Toast';
-import { fieldError, send } from '@/lib/client/api';
+import { fieldError, send, type Failure } from '@/lib/client/api';
 import { useSend } from '@/lib/client/use-send';
 import { localInstant } from '@/lib/domain/local-instant';
 import { parseHoursToTenths } from '@/lib/domain/meter';
 import { toHours } from '@/lib/schemas/schedule-shape';
+import type { PartLine } from '@/lib/schemas/part';
 import type { Closure, TaskPage } from '@/lib/schemas/task';
+import type { TaskParts } from '@/lib/schemas/task-parts';
+import { PartsUsed } from './PartsUsed';
+import { usePartsUsed } from './use-parts-used';
 import { WhenFields, type When } from './WhenFields';
 
 type Closing = Pick<TaskPage, 'id' | 'title' | 'fleetNumber' | 'engineHours' | 'timeZone' | 'today'>;
 
-/** Records that a task was done. Hours are those of the live meter unless others are typed. */
-export function CloseForm({ task }: { task: Closing }) {
+/** Records that a task was done. Hours are those of the live meter, parts those it needs, unless others are said. */
+export function CloseForm({
+  task,
+  taskParts,
+  parts,
+}: {
+  task: Closing;
+  taskParts: TaskParts;
+  parts: PartLine[];
+}) {
+  const used = usePartsUsed(taskParts, parts);
   const { busy, failure, run } = useSend();
   const live = task.engineHours.toFixed(1);
   const [done, setDone] = useState<When>({ when: 'now', day: task.today, time: '12:00' });
@@ -41,26 +54,19 @@ export function CloseForm({ task }: { task: Closing }) {
       ...(parsed?.ok && (earlier || hours !== live) && { engineHours: toHours(parsed.tenths) }),
       ...(minutes.trim() && { minutes: Number(minutes) }),
       ...(note.trim() && { note }),
+      ...(used.sent.length > 0 && { partsUsed: used.sent }),
     };
     const closed = await run(() => send<Closure>('POST', `/api/v1/tasks/${task.id}/closure`, body));
-    if (!closed) return;
+    if (!closed) return router.refresh();
     toast({
       text: `${task.title} on ${task.fleetNumber} is closed at ${closed.data.engineHours.toFixed(1)} h.`,
     });
     router.refresh();
   }
 
-  const errors = [
-    ...(unread ? [{ path: 'engineHours', message: unread }] : []),
-    ...(failure
-      ? failure.errors.length > 0
-        ? failure.errors
-        : [{ path: '', message: failure.detail }]
-      : []),
-  ].map(({ path, message }) => ({ path: FIELDS.includes(path) ? path : '', message }));
   return (
     <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-5">
-      <ErrorSummary errors={errors} title="The task is not closed yet" />
+      <ErrorSummary errors={listErrors(unread, failure)} title="The task is not closed yet" />
       <WhenFields
         value={done}
         today={task.today}
@@ -94,6 +100,12 @@ export function CloseForm({ task }: { task: Closing }) {
         error={fieldError(failure, 'minutes')}
         onChange={(event) => setMinutes(event.target.value)}
       />
+      <PartsUsed
+        used={used}
+        parts={parts}
+        dockName={taskParts.dockName}
+        errorOf={(path) => fieldError(failure, path)}
+      />
       <Textarea
         name="note"
         label="What was found and done"
@@ -110,7 +122,20 @@ export function CloseForm({ task }: { task: Closing }) {
   );
 }
 
+/** What stands above the form: a field's error links to it, another's does not. */
+function listErrors(unread: string | null, failure: Failure | null) {
+  const refused = failure?.errors.length
+    ? failure.errors
+    : failure
+      ? [{ path: '', message: failure.detail }]
+      : [];
+  return [...(unread ? [{ path: 'engineHours', message: unread }] : []), ...refused].map(
+    ({ path, message }) => ({ path: isField(path) ? path : '', message }),
+  );
+}
+
 const FIELDS = ['at', 'engineHours', 'minutes', 'note'];
+const isField = (path: string) => FIELDS.includes(path) || path.startsWith('partsUsed.');
 
 /** '2026-06-05' and '14:30' at the dock as an instant. */
 function instantOf(day: string, time: string, timeZone: string): string {

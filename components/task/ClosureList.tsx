@@ -34,6 +34,11 @@ export function ClosureList({
               Service record (PDF)
             </a>
           </p>
+          {closure.partsUsed.length > 0 ? (
+            <p className="text-ink-soft">
+              Parts: {closure.partsUsed.map(({ quantity, name }) => `${quantity} × ${name}`).join(', ')}.
+            </p>
+          ) : null}
           {closure.reversedAt ? (
             <p className="font-semibold">
               Reversed by {closure.reversedBy?.name ?? 'the system'}: {closure.reverseReason}

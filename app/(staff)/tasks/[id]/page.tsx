@@ -9,13 +9,16 @@ import { CloseForm } from '@/components/task/CloseForm';
 import { ClosuresSection, NotesSection, PlanSection, ProcedureSection } from '@/components/task/sections';
 import { StartControl } from '@/components/task/StartControl';
 import { TaskFacts } from '@/components/task/TaskFacts';
+import { TaskPartsSection } from '@/components/task/TaskPartsSection';
 import { TaskState } from '@/components/task/TaskState';
 import { LinkButton } from '@/components/ui/LinkButton';
 import { Notice } from '@/components/ui/Notice';
 import { PageHeader } from '@/components/ui/PageHeader';
 import { getTask } from '@/lib/actions/get-task';
-import { listAttachments } from '@/lib/actions/list-attachments';
+import { getTaskParts } from '@/lib/actions/get-task-parts';
 import { getWork } from '@/lib/actions/get-work';
+import { listAttachments } from '@/lib/actions/list-attachments';
+import { listParts } from '@/lib/actions/list-parts';
 import { may } from '@/lib/auth/may';
 import { pageContext } from '@/lib/auth/page';
 import { orNotFound, pageId } from '@/lib/auth/page-row';
@@ -35,7 +38,13 @@ export default async function TaskPage({ params }: Props) {
   const now = ctx.now.toISOString();
   const open = task.endedAt === null;
   const mayWork = open && may(ctx, 'task.write', task.dockId);
-  const [work, files] = await Promise.all([getWork(ctx, task.id), listAttachments(ctx, { taskId: task.id })]);
+  const [work, files, taskParts, stock] = await Promise.all([
+    getWork(ctx, task.id),
+    listAttachments(ctx, { taskId: task.id }),
+    getTaskParts(ctx, task.id),
+    mayWork ? listParts(ctx, { limit: 500 }) : null,
+  ]);
+  const parts = stock?.items ?? [];
   return (
     <>
       <PageHeader
@@ -61,6 +70,7 @@ export default async function TaskPage({ params }: Props) {
             <div className="grid content-start gap-8">
               <TaskFacts task={task} now={now} />
               {open ? <Cautions kind={task.kind} /> : null}
+              {open ? <TaskPartsSection task={taskParts} parts={parts} mayWork={mayWork} /> : null}
             </div>
             {mayWork ? (
               <div className="no-print grid content-start gap-8">
@@ -90,7 +100,7 @@ export default async function TaskPage({ params }: Props) {
                     Close
                   </h2>
                   {task.procedure ? <OpenPoints /> : null}
-                  <CloseForm key={task.revision} task={task} />
+                  <CloseForm key={task.revision} task={task} taskParts={taskParts} parts={parts} />
                 </section>
               ) : null}
             </div>
