@@ -20,6 +20,7 @@ import { DOCKS, OPERATOR_NAME } from './docks';
 import { writeTheDay } from './finish';
 import { writeHistory } from './history';
 import { MODELS } from './models';
+import { addParts, partsOf, stockDocks } from './parts';
 import { addCrew, DEMO_MANAGER, DEMO_PASSWORD, type Crew } from './people';
 import { chanceOf } from './random';
 import { listDemoRules, PROCEDURE_NAMES, RULE_KEYS, type RuleKey } from './rules';
@@ -55,6 +56,7 @@ export async function seedDemo(
   });
   books.sort((a, b) => (a.fleetNumber < b.fleetNumber ? -1 : 1));
   const dockIds = house.docks.map(({ id }) => id);
+  await stockDocks({ ...begin, now }, { ids: house.parts, dockIds, crews: house.crews });
   await writeTheDay(books, dockIds, now);
   await settle(db, books, now);
   progress('the fleet is as it stands today');
@@ -66,6 +68,8 @@ type House = {
   crews: Crew[];
   rules: Map<string, Rule>;
   byKey: Record<RuleKey, Rule>;
+  /** Ids by number. */
+  parts: ReadonlyMap<string, string>;
 };
 
 async function furnish(ctx: Context, start: CalendarDay): Promise<House> {
@@ -83,15 +87,20 @@ async function furnish(ctx: Context, start: CalendarDay): Promise<House> {
     ctx.now,
   );
   const procedures = new Map((await listProcedures(ctx)).map(({ id, name }) => [name, id]));
+  const parts = await addParts({ ...ctx, actor: crews[0]!.manager });
   const byKey = {} as Record<RuleKey, Rule>;
   const inputs = listDemoRules(partsOfDay(start).year, docks.at(-1)!.id);
   for (const key of RULE_KEYS)
     byKey[key] = await createRule(
       { ...ctx, actor: crews[0]!.manager },
-      { ...inputs[key], procedureId: procedures.get(PROCEDURE_NAMES[key] ?? inputs[key].name) ?? null },
+      {
+        ...inputs[key],
+        procedureId: procedures.get(PROCEDURE_NAMES[key] ?? inputs[key].name) ?? null,
+        parts: partsOf(key, parts),
+      },
     );
   const rules = new Map(Object.values(byKey).map((rule) => [rule.id, rule]));
-  return { docks, models, crews, rules, byKey };
+  return { docks, models, crews, rules, byKey, parts };
 }
 
 /** Adds a unit with its past, and writes its history. */

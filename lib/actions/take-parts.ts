@@ -30,14 +30,9 @@ export async function checkPartsUsed(
   trx: Transaction<DB>,
   { taskId, dockId, used }: Taking,
 ): Promise<ClosedPart[]> {
-  const parts = new Map(
-    (
-      await listPartsOf(
-        trx,
-        used.map(({ partId }) => partId),
-      )
-    ).map((part) => [part.id, part]),
-  );
+  const ids = used.map(({ partId }) => partId);
+  const rows = ids.length > 0 ? await listPartsOf(trx, ids) : [];
+  const parts = new Map(rows.map((part) => [part.id, part]));
   const docks = new Map<string, string>();
   for (const [index, line] of used.entries()) {
     if (!parts.has(line.partId))

@@ -48,6 +48,8 @@ const FACTS = {
       from task t join unit u on u.id = t.unit_id order by 1, 3, 2`,
   defects: `select u.fleet_number, d.title, d.reported_at, d.cleared_at from defect d join unit u on u.id = d.unit_id
      order by 1, 3, 2`,
+  stockMoves: `select p.number, d.name, m.kind, m.quantity, m.reason, m.moved_at from stock_move m
+      join part p on p.id = m.part_id join dock d on d.id = m.dock_id order by 1, 2, m.seq`,
   duePoints: `select u.fleet_number, r.name, p.trigger_index, p.due_tenths, p.due_outings, p.due_on
       from due_point p join unit u on u.id = p.unit_id join rule r on r.id = p.rule_id order by 1, 2, 3`,
 };
