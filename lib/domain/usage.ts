@@ -60,10 +60,11 @@ export function computeDailyUsage(facts: UsageFacts): DailyUsage | null {
     open,
     unplacedTenths: 0,
   };
+  let earlier = 0;
   facts.readings.forEach((reading, index) => {
-    const earlier = facts.readings[index - 1];
-    if (!earlier) return;
-    spread(usage, numberOfDay(earlier.on) - from, numberOfDay(reading.on) - from, ranOf(earlier, reading));
+    const later = numberOfDay(reading.on) - from;
+    if (index > 0) spread(usage, earlier, later, ranOf(facts.readings[index - 1]!, reading));
+    earlier = later;
   });
   const known = Math.max(0, endOfKnown(facts, last.on) - from);
   for (const days of [usage.tenths, usage.outings, usage.open]) days.length = known;
@@ -126,17 +127,14 @@ function countOutings(outings: readonly CalendarDay[], from: number, open: reado
 function spread(usage: DailyUsage, earlier: number, later: number, ran: number): void {
   const { tenths, outings, open } = usage;
   const start = earlier === later ? later : earlier + 1;
-  const weigh = (weights: readonly number[]) => {
-    let sum = 0;
-    for (let index = start; index <= later; index += 1) sum += weights[index] ?? 0;
-    return sum;
-  };
-  const opened = open.map(Number);
-  const weights = weigh(outings) > 0 ? outings : opened;
-  const sum = weigh(weights);
-  if (sum === 0) {
-    usage.unplacedTenths += ran;
-    return;
+  let [back, opened] = [0, 0];
+  for (let index = start; index <= later; index += 1) {
+    back += outings[index]!;
+    opened += Number(open[index]);
   }
-  for (let index = start; index <= later; index += 1) tenths[index]! += (ran * (weights[index] ?? 0)) / sum;
+  if (back + opened === 0) usage.unplacedTenths += ran;
+  for (let index = start; index <= later && opened > 0; index += 1) {
+    const share = back > 0 ? outings[index]! / back : Number(open[index]) / opened;
+    tenths[index]! += ran * share;
+  }
 }
