@@ -2,6 +2,7 @@ import { cpus } from 'node:os';
 import { measureCheckIn } from './check-in';
 import { measureDuePoint } from './due-point';
 import { toTable, type Figure } from './figures';
+import { measureForecast } from './forecast';
 import { measureReads } from './reads';
 import { measureRecompute } from './recompute';
 import { measureRecurrence } from './recurrence';
@@ -10,6 +11,7 @@ import { openSetting, peakMemory, type Setting } from './setting';
 const MEMORY_MB = 400;
 const MEASUREMENTS: Record<string, (setting: Setting) => Promise<Figure[]>> = {
   recurrence: measureRecurrence,
+  forecast: measureForecast,
   recompute: measureRecompute,
   reads: measureReads,
   'check-in': measureCheckIn,
