@@ -1,5 +1,6 @@
 import { type CalendarDay, dayOfNumber } from './calendar-day';
 import type { UsageForecast } from './forecast';
+import { normalChance } from './normal';
 
 /**
  * When a meter will come to a due point: the expected day, and an 80 % range. Null is later than the forecast
@@ -40,4 +41,13 @@ function suretyOf(sum: number, doubt: number, left: number): number {
   if (sum <= 0) return -Infinity;
   const variance = Math.log1p(doubt);
   return Math.log(sum / left) / Math.sqrt(variance + 1e-12);
+}
+
+/** The chance that what is `left` will have been run by the end of each day of the forecast; it never falls. */
+export function computeChances({ sums, doubts }: UsageForecast, left: number): Float64Array {
+  let chance = 0;
+  return sums.map((sum, ahead) => {
+    chance = Math.max(chance, left <= 0 ? 1 : normalChance(suretyOf(sum, doubts[ahead]!, left)));
+    return chance;
+  });
 }
