@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { dayOfNumber, numberOfDay, WEEKDAYS } from '@/lib/domain/calendar-day';
 import { computePool, forecastUnit, type Pool, toUnitDays, type UnitDays } from '@/lib/domain/forecast';
-import { computePassage } from '@/lib/domain/forecast-passage';
+import { computeChances, computePassage } from '@/lib/domain/forecast-passage';
 import { computeDailyUsage, computeOpenDays } from '@/lib/domain/usage';
 import { dice } from '../../support/simulated-hires';
 
@@ -109,6 +109,23 @@ describe('what a unit will run', () => {
       return numberOfDay(latestOn!) - numberOfDay(earliestOn!);
     };
     expect(width(200)).toBeLessThan(width(1000));
+  });
+
+  test('the chance to have come to a due point grows day by day, and is a tenth where the range begins', () => {
+    const forecast = forecastUnit(mustPool([unit('a', 300, 40, 3)]), 'a', FROM + 300, always(400));
+    const { earliestOn, expectedOn, latestOn } = computePassage(forecast, 600);
+    const chances = computeChances(forecast, 600);
+    const at = (day: string | null) => numberOfDay(day!) - forecast.from;
+    for (const [day, bar] of [
+      [at(earliestOn), 0.1],
+      [at(expectedOn), 0.5],
+      [at(latestOn), 0.9],
+    ] as const) {
+      expect(chances[day]).toBeGreaterThanOrEqual(bar);
+      expect(chances[day - 1]).toBeLessThan(bar);
+    }
+    chances.forEach((chance, day) => expect(chance).toBeGreaterThanOrEqual(chances[day - 1] ?? 0));
+    expect(computeChances(forecast, 0)[0]).toBe(1);
   });
 
   test('counts outings by the same rules', () => {
