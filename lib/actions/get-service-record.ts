@@ -39,7 +39,10 @@ export async function getServiceRecord(
     note: closure.note,
     results: closure.results,
     signOffs: closure.sign_offs,
-    parts: [],
+    parts: closure.parts_used.map(
+      ({ quantity, name, number, dockName, reason }) =>
+        `${quantity} × ${name} (${number}), from ${dockName}${reason ? `: ${reason}` : ''}`,
+    ),
     reversed: closure.reversed_at && {
       at: closure.reversed_at,
       by: closure.reverser_name,

@@ -1,10 +1,13 @@
+import { randomUUID } from 'node:crypto';
 import type { Page } from '@playwright/test';
 import sharp from 'sharp';
 import { extractText, getDocumentProxy } from 'unpdf';
 import { addStarterProcedures } from '@/lib/actions/add-starter-procedures';
 import { changeModel } from '@/lib/actions/change-model';
+import { createPart } from '@/lib/actions/create-part';
 import { createRule } from '@/lib/actions/create-rule';
 import { listProcedures } from '@/lib/actions/list-procedures';
+import { recordStockMove } from '@/lib/actions/record-stock-move';
 import { refreshDue } from '@/lib/actions/refresh-due';
 import { createRule as createRuleInput } from '@/lib/schemas/rule';
 import { asSystem, minutesAgo, openDock } from '../support/crew';
@@ -33,6 +36,11 @@ async function openWorkshop({ database }: Running) {
     },
   });
   const procedure = (await listProcedures(ctx)).find(({ name }) => name === 'Carburettor rebuild')!;
+  const kitId = randomUUID();
+  await createPart(ctx, { id: kitId, number: 'CK-2', name: 'Carburettor kit' });
+  await recordStockMove(ctx, {
+    ...{ id: randomUUID(), kind: 'receive', partId: kitId, dockId: opened.dock.id, quantity: 5 },
+  });
   await createRule(
     ctx,
     createRuleInput.parse({
@@ -41,6 +49,7 @@ async function openWorkshop({ database }: Running) {
       appliesTo: {},
       triggers: [{ on: 'engine_hours', every: 99 }],
       procedureId: procedure.id,
+      parts: [{ partId: kitId, quantity: 1, per: 'carb' }],
       wantsSecondPerson: true,
       wantsTestRide: true,
     }),
@@ -191,12 +200,20 @@ test('a twin is rebuilt, one carburettor fails and is followed up alone, two peo
   expect(record).toContain('carburettor 2, as found: 17 psi, 17 psi – OUT OF LIMITS (21 psi to 37 psi');
   expect(record).toContain('carburettor 2, as left: 25 psi, 25 psi – within limits');
   expect(record).toContain('70 min');
+  expect(record).toContain('1 × Carburettor kit (CK-2), from Cais Norte');
   expect(record).toMatch(
     /Second person: A manager, .* Test ride: A mechanic|Test ride: A mechanic, .* Second person: A manager/,
   );
+  await expectOnHand(empty, 2);
   await list.goto('/availability');
   await expect(list.getByRole('heading', { name: 'Ready 1' })).toBeVisible();
 });
+
+/** Of the five kits there were: two for the twin, one for the carburettor that was followed up. */
+async function expectOnHand({ database }: Running, kits: number): Promise<void> {
+  const moves = await database.db.selectFrom('stock_move').select('quantity').execute();
+  expect(moves.reduce((sum, { quantity }) => sum + quantity, 0)).toBe(kits);
+}
 
 test('two mechanics at one task see each other and each other’s entries, and neither loses one', async ({
   browser,
