@@ -3,7 +3,7 @@
 import { useCallback, useEffect, useMemo, useState } from 'react';
 import { send, type Failure } from '@/lib/client/api';
 import { makeId } from '@/lib/client/entry-id';
-import { discardEntry, keepEntry, type KeptEntry } from '@/lib/client/outbox';
+import { discardEntry, keepEntry, type KeptEntry, type SentEntry } from '@/lib/client/outbox';
 import { useOutbox } from '@/lib/client/use-outbox';
 import { usePolled } from '@/lib/client/use-polled';
 import { checkClosing, type ClosingFault } from '@/lib/domain/closing-check';
@@ -100,8 +100,8 @@ function useArrivals(ask: () => Promise<void>) {
   const [overtaken, setOvertaken] = useState<Overtaken[]>([]);
   const [arrived, setArrived] = useState<Entry[]>([]);
   const sent = useCallback(
-    ({ id, file }: KeptEntry, answer: unknown) => {
-      if (file) return;
+    ({ entry: { id }, isFile, answer }: SentEntry) => {
+      if (isFile) return;
       const { entry, overtook } = answer as RecordedEntry;
       setArrived((list) => [...list, entry]);
       if (overtook) setOvertaken((list) => [...list, { id, overtook }]);

@@ -3,7 +3,7 @@
 import { useCallback, useEffect, useMemo, useState } from 'react';
 import { send } from '@/lib/client/api';
 import { makeId } from '@/lib/client/entry-id';
-import { discardEntry, keepEntry, progressOf, type KeptEntry } from '@/lib/client/outbox';
+import { discardEntry, keepEntry, progressOf, type KeptEntry, type SentEntry } from '@/lib/client/outbox';
 import { useOutbox } from '@/lib/client/use-outbox';
 import type { Attachment } from '@/lib/schemas/attachment';
 
@@ -79,7 +79,7 @@ export function useFiles(of: FileOf, initial: readonly Attachment[], owner: stri
   const scope = `files:${of.taskId ?? of.defectId ?? of.unitId}`;
   const [added, setAdded] = useState<Attachment[]>([]);
   const [removed, setRemoved] = useState<string[]>([]);
-  const sent = useCallback((_: KeptEntry, answer: unknown) => {
+  const sent = useCallback(({ answer }: SentEntry) => {
     setAdded((list) => [answer as Attachment, ...list]);
   }, []);
   const { kept, ready, drain } = useOutbox(scope, owner, sent);

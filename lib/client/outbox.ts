@@ -39,9 +39,19 @@ function open(): Promise<IDBPDatabase<OutboxDatabase>> {
   return opened;
 }
 
+/** An entry that the server took, and what it answered. */
+export type SentEntry = {
+  entry: Pick<KeptEntry, 'id' | 'scope' | 'owner'>;
+  isFile: boolean;
+  answer: unknown;
+};
+
 const changes = new EventTarget();
 const channel = typeof BroadcastChannel === 'undefined' ? null : new BroadcastChannel('wakewright-outbox');
-channel?.addEventListener('message', () => changes.dispatchEvent(new Event('change')));
+channel?.addEventListener('message', ({ data }: MessageEvent<SentEntry | 'change'>) => {
+  if (data === 'change') changes.dispatchEvent(new Event('change'));
+  else changes.dispatchEvent(new CustomEvent('sent', { detail: data }));
+});
 
 function tellChange(): void {
   changes.dispatchEvent(new Event('change'));
@@ -67,6 +77,19 @@ function tellProgress(id: string, share: number): void {
   changes.dispatchEvent(new Event('change'));
 }
 
+/** Calls `listener` for every entry that is taken, whichever part of which tab sent it. Answers how to stop. */
+export function onOutboxSent(listener: (sent: SentEntry) => void): () => void {
+  const heard = (event: Event) => listener((event as CustomEvent<SentEntry>).detail);
+  changes.addEventListener('sent', heard);
+  return () => changes.removeEventListener('sent', heard);
+}
+
+function tellSent({ id, scope, owner, file }: KeptEntry, answer: unknown): void {
+  const detail: SentEntry = { entry: { id, scope, owner }, isFile: file !== undefined, answer };
+  changes.dispatchEvent(new CustomEvent('sent', { detail }));
+  channel?.postMessage(detail);
+}
+
 /** Keeps an entry on this device. It is safe from a reload, a lost connection and a closed browser once this is done. */
 export async function keepEntry(entry: OutboxEntry): Promise<void> {
   const database = await open();
@@ -87,10 +110,7 @@ export async function discardEntry(order: number): Promise<void> {
 }
 
 /** Sends what this person entered, in order, until all is sent or the server cannot be reached. */
-export async function drainOutbox(
-  owner: string,
-  sent: (entry: KeptEntry, answer: unknown) => void,
-): Promise<void> {
+export async function drainOutbox(owner: string): Promise<void> {
   await alone(async () => {
     const database = await open();
     const all = (await database.getAll('entry')) as KeptEntry[];
@@ -101,7 +121,7 @@ export async function drainOutbox(
       progress.delete(entry.id);
       if (answer.ok) {
         await database.delete('entry', entry.order);
-        sent(entry, answer.data);
+        tellSent(entry, answer.data);
       } else if (LATER.includes(answer.code)) {
         return;
       } else if (answer.code === 'fault' && entry.faults + 1 < MOST_FAULTS) {
@@ -116,16 +136,28 @@ export async function drainOutbox(
 }
 
 let draining = false;
+let wantedAgain = false;
 
-/** One drain at a time, over all tabs where the browser can: ids make a second one harmless, only wasteful. */
+/**
+ * One drain at a time, over all tabs where the browser can: ids make a second one harmless, only wasteful. One asked
+ * for meanwhile follows at once, for it may be about what came after.
+ */
 async function alone(work: () => Promise<void>): Promise<void> {
-  if (draining) return;
+  if (draining) {
+    wantedAgain = true;
+    return;
+  }
   draining = true;
   try {
     const locks = typeof navigator === 'undefined' ? undefined : navigator.locks;
-    if (!locks) await work();
-    else
-      await locks.request('wakewright-outbox', { ifAvailable: true }, (lock) => (lock ? work() : undefined));
+    do {
+      wantedAgain = false;
+      if (!locks) await work();
+      else
+        await locks.request('wakewright-outbox', { ifAvailable: true }, (lock) =>
+          lock ? work() : undefined,
+        );
+    } while (wantedAgain);
   } finally {
     draining = false;
   }

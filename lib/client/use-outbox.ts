@@ -1,7 +1,14 @@
 'use client';
 
 import { useCallback, useEffect, useRef, useState } from 'react';
-import { drainOutbox, listKept, onOutboxChange, type KeptEntry } from './outbox';
+import {
+  drainOutbox,
+  listKept,
+  onOutboxChange,
+  onOutboxSent,
+  type KeptEntry,
+  type SentEntry,
+} from './outbox';
 
 /** How soon what could not be sent is tried again, while the page is open. */
 const AGAIN_MS = 4000;
@@ -13,7 +20,7 @@ const AGAIN_MS = 4000;
 export function useOutbox(
   scope: string,
   owner: string,
-  sent: (entry: KeptEntry, answer: unknown) => void,
+  sent: (sent: SentEntry) => void,
 ): { kept: KeptEntry[]; ready: boolean; drain: () => void } {
   const [kept, setKept] = useState<KeptEntry[]>([]);
   const [ready, setReady] = useState(false);
@@ -21,11 +28,7 @@ export function useOutbox(
   useEffect(() => {
     tell.current = sent;
   }, [sent]);
-  const drain = useCallback(() => {
-    void drainOutbox(owner, (entry, answer) => {
-      if (entry.scope === scope) tell.current(entry, answer);
-    });
-  }, [owner, scope]);
+  const drain = useCallback(() => void drainOutbox(owner), [owner]);
 
   useEffect(() => {
     let stopped = false;
@@ -37,6 +40,9 @@ export function useOutbox(
     };
     const changed = () => void look();
     const stop = onOutboxChange(changed);
+    const stopHearing = onOutboxSent((gone) => {
+      if (gone.entry.scope === scope && gone.entry.owner === owner) tell.current(gone);
+    });
     const seen = () => {
       if (!document.hidden) drain();
     };
@@ -48,6 +54,7 @@ export function useOutbox(
     return () => {
       stopped = true;
       stop();
+      stopHearing();
       clearInterval(timer);
       window.removeEventListener('online', drain);
       document.removeEventListener('visibilitychange', seen);
