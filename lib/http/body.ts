@@ -24,21 +24,25 @@ export async function readJson(request: Request): Promise<unknown> {
 /** The request's body as text. Throws `too_large` beyond `MAX_BODY_BYTES`. */
 export async function readText(request: Request): Promise<string> {
   const tooLarge = new Refusal('too_large', `A body is at most ${MAX_BODY_BYTES / 1024} KiB.`);
-  if (Number(request.headers.get('content-length') ?? 0) > MAX_BODY_BYTES) throw tooLarge;
-  if (!request.body) return '';
-  const decoder = new TextDecoder();
+  return new TextDecoder().decode(await readAtMost(request, MAX_BODY_BYTES, tooLarge));
+}
+
+/** The request's body, never reading more than `most` bytes. Throws `tooLarge` beyond that. */
+export async function readAtMost(request: Request, most: number, tooLarge: Refusal): Promise<Buffer> {
+  if (Number(request.headers.get('content-length') ?? 0) > most) throw tooLarge;
+  if (!request.body) return Buffer.alloc(0);
+  const chunks: Uint8Array[] = [];
   let bytes = 0;
-  let text = '';
   const reader = request.body.getReader();
   for (;;) {
     const { done, value } = await reader.read();
-    if (done) return text + decoder.decode();
+    if (done) return Buffer.concat(chunks);
     bytes += value.byteLength;
-    if (bytes > MAX_BODY_BYTES) {
+    if (bytes > most) {
       await reader.cancel();
       throw tooLarge;
     }
-    text += decoder.decode(value, { stream: true });
+    chunks.push(value);
   }
 }
 
