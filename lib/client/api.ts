@@ -43,16 +43,23 @@ export async function send<T>(method: Method, path: string, body?: unknown): Pro
 
 async function readAnswer<T>(response: Response): Promise<Answer<T>> {
   try {
-    const text = await response.text();
-    const json: unknown = text ? JSON.parse(text) : null;
-    return response.ok ? { ok: true, data: json as T } : toFailure(json);
+    return toAnswer<T>(response.ok, await response.text());
   } catch {
     return response.ok ? LOST : toFailure(null);
   }
 }
 
-/** A refusal as the API sent it; anything else as a fault. */
-export function toFailure(json: unknown): Failure {
+/** What came back, from its text; a success that cannot be read is a lost answer. */
+export function toAnswer<T>(ok: boolean, text: string): Answer<T> {
+  try {
+    const json: unknown = text ? JSON.parse(text) : null;
+    return ok ? { ok: true, data: json as T } : toFailure(json);
+  } catch {
+    return ok ? LOST : toFailure(null);
+  }
+}
+
+function toFailure(json: unknown): Failure {
   const problem = (typeof json === 'object' && json !== null ? json : {}) as Partial<Failure>;
   return {
     ok: false,

@@ -1,4 +1,4 @@
-import { LOST, toFailure, type Answer } from './api';
+import { LOST, toAnswer, type Answer } from './api';
 
 /**
  * Sends a file as it is to a path of the API, telling how much has gone, from 0 to 1. As `send`, it never throws: a
@@ -11,18 +11,10 @@ export function sendFile<T>(path: string, file: Blob, gone: (share: number) => v
     request.setRequestHeader('accept', 'application/json');
     request.setRequestHeader('content-type', 'application/octet-stream');
     request.upload.addEventListener('progress', ({ loaded, total }) => gone(total > 0 ? loaded / total : 0));
-    request.addEventListener('load', () => resolve(readAnswer<T>(request)));
+    request.addEventListener('load', () =>
+      resolve(toAnswer<T>(request.status >= 200 && request.status < 300, request.responseText)),
+    );
     for (const event of ['error', 'abort', 'timeout']) request.addEventListener(event, () => resolve(LOST));
     request.send(file);
   });
-}
-
-function readAnswer<T>({ status, responseText }: XMLHttpRequest): Answer<T> {
-  const ok = status >= 200 && status < 300;
-  try {
-    const json: unknown = JSON.parse(responseText);
-    return ok ? { ok: true, data: json as T } : toFailure(json);
-  } catch {
-    return ok ? LOST : toFailure(null);
-  }
 }
