@@ -7,6 +7,7 @@ import { mergeSpecs, type Specs } from '@/lib/domain/measurement';
 import type { OnlyPlace, Step, StepEntry } from '@/lib/domain/procedure';
 import type { UnitCounts } from '@/lib/domain/rule';
 import { computeSteps, type StepState } from '@/lib/domain/step-states';
+import type { SignOff } from '@/lib/schemas/work';
 import { toFollowUps, toSignOffs } from './shape-work';
 
 /** What the steps of a task are computed from. */
@@ -42,22 +43,22 @@ export function toStepEntry(row: StepEntryRow): StepEntry {
   return { stepKey: row.step_key, place: row.place, stage: row.stage, value: row.value };
 }
 
-/** What keeps a task from being closed by this person, with the states it was computed from. */
+/** What keeps a task from being closed by this person, with what it was computed from. */
 export async function checkBench(
   db: Kysely<DB>,
   bench: Bench,
   closerId: string | null,
-): Promise<{ faults: ClosingFault[]; states: StepState[]; entries: StepEntryRow[] }> {
+): Promise<{ faults: ClosingFault[]; states: StepState[]; entries: StepEntryRow[]; signOffs: SignOff[] }> {
   const taskId = bench.row.task_id;
   const entries = await listStepEntries(db, taskId);
   const followUps = await listFollowUps(db, taskId);
-  const signOffs = await listSignOffs(db, taskId);
+  const signOffs = toSignOffs(await listSignOffs(db, taskId), entries);
   const states = computeBench(bench, entries.map(toStepEntry));
   const faults = checkClosing({
     states,
     holdsUnit: bench.row.holds_unit,
     followUps: toFollowUps(followUps),
-    signOffs: toSignOffs(signOffs, entries).map(({ kind, stands, signedBy }) => ({
+    signOffs: signOffs.map(({ kind, stands, signedBy }) => ({
       kind,
       stands,
       personId: signedBy.id,
@@ -65,5 +66,5 @@ export async function checkBench(
     wants: { secondPerson: bench.row.wants_second_person, testRide: bench.row.wants_test_ride },
     closerId,
   });
-  return { faults, states, entries };
+  return { faults, states, entries, signOffs };
 }

@@ -1,7 +1,6 @@
 import type { Insertable, Transaction } from 'kysely';
 import { insertStepEntries, listStepEntries, type StepEntryRow } from '@/db/queries/step-entries';
 import type { DB, StepEntryTable } from '@/db/tables';
-import { listSignOffs } from '@/db/queries/bench';
 import type { Context } from '@/lib/context';
 import { personIdOf } from '@/lib/domain/access';
 import type { ClosedResult, ClosedSignOff } from '@/lib/domain/closed-work';
@@ -27,7 +26,7 @@ export async function settleBench(
 ): Promise<{ results: ClosedResult[]; signOffs: ClosedSignOff[] }> {
   const bench = await loadBench(trx, taskId);
   if (results.length > 0) await recordResults(ctx, trx, bench, results);
-  const { faults, states, entries } = await checkBench(trx, bench, personIdOf(ctx.actor));
+  const { faults, states, entries, signOffs } = await checkBench(trx, bench, personIdOf(ctx.actor));
   if (faults.length > 0)
     throw new Refusal(
       'conflict',
@@ -39,15 +38,9 @@ export async function settleBench(
         message,
       })),
     );
-  const signOffs = await listSignOffs(trx, taskId);
   return {
     results: freezeResults(states, entries),
-    signOffs: signOffs.map(({ kind, note, signed_at, signed_by, signer_name }) => ({
-      kind,
-      note,
-      signedAt: signed_at.toISOString(),
-      signedBy: { id: signed_by, name: signer_name },
-    })),
+    signOffs: signOffs.map(({ kind, note, signedAt, signedBy }) => ({ kind, note, signedAt, signedBy })),
   };
 }
 
