@@ -3,10 +3,9 @@ import { beforeEach, describe, expect, test } from 'vitest';
 import type { PartLine, Part } from '@/lib/schemas/part';
 import type { RecordedMoves, StockLine } from '@/lib/schemas/stock';
 import { expectRefused } from '../support/bad-input';
-import { openDock } from '../support/crew';
 import { testDatabase } from '../support/database';
 import { testApi, type Caller } from '../support/http';
-import { addPart, stockUp } from '../support/stock';
+import { openStock, stockUp } from '../support/stock';
 
 const database = testDatabase();
 const api = testApi(database);
@@ -19,17 +18,8 @@ let needle: string;
 let kit: string;
 
 beforeEach(async () => {
-  north = (await openDock(database.db)).dock.id;
-  south = (await openDock(database.db, { name: 'Cais Sul', fleetNumber: 'S-1' })).dock.id;
+  ({ north, south, gasket, needle, kit } = await openStock(database.db));
   manager = await api.caller('manager', { name: 'Ines Marlow' });
-  gasket = (await addPart(database.db, 'Gasket')).id;
-  needle = (await addPart(database.db, 'Needle')).id;
-  kit = (
-    await addPart(database.db, 'Carburettor kit', [
-      { partId: gasket, quantity: 3 },
-      { partId: needle, quantity: 1 },
-    ])
-  ).id;
 });
 
 const move = (kind: string, partId: string, quantity: number, more: object = {}) => ({

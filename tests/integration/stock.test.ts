@@ -2,10 +2,9 @@ import { randomUUID } from 'node:crypto';
 import { beforeEach, describe, expect, test } from 'vitest';
 import type { RecordedMoves, StockLine, StockMove } from '@/lib/schemas/stock';
 import { expectRefused } from '../support/bad-input';
-import { openDock } from '../support/crew';
 import { testDatabase } from '../support/database';
 import { testApi, type Caller } from '../support/http';
-import { addPart, onShelves, stockUp } from '../support/stock';
+import { onShelves, openStock, stockUp } from '../support/stock';
 
 const database = testDatabase();
 const api = testApi(database);
@@ -18,17 +17,8 @@ let needle: string;
 let kit: string;
 
 beforeEach(async () => {
-  north = (await openDock(database.db)).dock.id;
-  south = (await openDock(database.db, { name: 'Cais Sul', fleetNumber: 'S-1' })).dock.id;
+  ({ north, south, gasket, needle, kit } = await openStock(database.db));
   manager = await api.caller('manager', { name: 'Ines Marlow' });
-  gasket = (await addPart(database.db, 'Gasket')).id;
-  needle = (await addPart(database.db, 'Needle')).id;
-  kit = (
-    await addPart(database.db, 'Carburettor kit', [
-      { partId: gasket, quantity: 3 },
-      { partId: needle, quantity: 1 },
-    ])
-  ).id;
 });
 
 const move = (kind: string, partId: string, quantity: number, more: object = {}) => ({

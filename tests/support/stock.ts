@@ -1,10 +1,10 @@
 import { randomUUID } from 'node:crypto';
 import type { Kysely } from 'kysely';
 import type { DB } from '@/db/tables';
-import type { RecordStockMove } from '@/lib/schemas/stock';
-import { asSystem } from './crew';
 import { createPart } from '@/lib/actions/create-part';
 import { recordStockMove } from '@/lib/actions/record-stock-move';
+import type { RecordStockMove } from '@/lib/schemas/stock';
+import { asSystem, openDock } from './crew';
 
 /** A part, or with `contents` a kit, through the action. */
 export function addPart(
@@ -18,6 +18,19 @@ export function addPart(
     name,
     ...(contents && { contents }),
   });
+}
+
+/** Two docks, and a kit of three gaskets and a needle with both parts of it: the ids of each. */
+export async function openStock(db: Kysely<DB>) {
+  const north = (await openDock(db)).dock.id;
+  const south = (await openDock(db, { name: 'Cais Sul', fleetNumber: 'S-1' })).dock.id;
+  const gasket = (await addPart(db, 'Gasket')).id;
+  const needle = (await addPart(db, 'Needle')).id;
+  const { id: kit } = await addPart(db, 'Carburettor kit', [
+    { partId: gasket, quantity: 3 },
+    { partId: needle, quantity: 1 },
+  ]);
+  return { north, south, gasket, needle, kit };
 }
 
 /** Puts so many of a part on a dock's shelf. */
